@@ -57,17 +57,38 @@ func Exp(x float64) float64 {
 }
 
 // ExpColumn sets dst[i] = Exp(src[i]) over the shorter length; dst may be src.
-func ExpColumn(dst, src []float64) {
+func ExpColumn(dst, src []float64) { ExpScaledColumn(dst, src, 1) }
+
+// ExpScaledColumn sets dst[i] = scale*Exp(src[i]) over the shorter length; dst
+// may be src. It says whether all arguments were so small that every
+// exponential is a normal number, which also says that all were finite.
+func ExpScaledColumn(dst, src []float64, scale float64) (usual bool) {
 	n := min(len(dst), len(src))
 	dst, src = dst[:n], src[:n]
-	for i, x := range src {
-		if !(math.Abs(x) <= expUsual) {
-			dst[i] = expSpecial(x)
-			continue
+	usual = true
+	for len(dst) >= 4 && len(src) >= 4 {
+		d, s := (*[4]float64)(dst), (*[4]float64)(src)
+		x0, x1, x2, x3 := s[0], s[1], s[2], s[3]
+		if math.Abs(x0) <= expUsual && math.Abs(x1) <= expUsual && math.Abs(x2) <= expUsual && math.Abs(x3) <= expUsual {
+			n0, r0 := expReduce(x0)
+			n1, r1 := expReduce(x1)
+			n2, r2 := expReduce(x2)
+			n3, r3 := expReduce(x3)
+			d[0] = float64(scale * expAssemble(n0, expRemainder(r0)))
+			d[1] = float64(scale * expAssemble(n1, expRemainder(r1)))
+			d[2] = float64(scale * expAssemble(n2, expRemainder(r2)))
+			d[3] = float64(scale * expAssemble(n3, expRemainder(r3)))
+		} else {
+			usual = false
+			d[0], d[1], d[2], d[3] = float64(scale*Exp(x0)), float64(scale*Exp(x1)), float64(scale*Exp(x2)), float64(scale*Exp(x3))
 		}
-		n, r := expReduce(x)
-		dst[i] = expAssemble(n, expRemainder(r))
+		dst, src = dst[4:], src[4:]
 	}
+	for i, x := range src {
+		usual = usual && math.Abs(x) <= expUsual
+		dst[i] = float64(scale * Exp(x))
+	}
+	return usual
 }
 
 // expSpecial is Exp for arguments whose result may not be a normal number.

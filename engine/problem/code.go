@@ -55,7 +55,7 @@ func Docs() []Doc {
 		{Construct, "a construct that sheets do not have", "derive a = 7 % 2"},
 		{Number, "a number is not well formed or out of range", "known a = 1e999"},
 		{Table, "a table's rows do not fit its header", "table t\n  a [m] | b [s]\n  1 | 2 | 3"},
-		{Limit, "a sheet, formula or list is larger than the stated limits", ""},
+		{Limit, "a sheet, formula or list is larger than the stated limits", "known a = 1\nvary a = 0 to 1 by 1e-7"},
 		{NotYet, "a statement that is read but not evaluated yet", "known a = 1\nvary a = 0 to 1 by 0.5"},
 		{RangeOrder, "a lower bound lies above its upper bound", "known a = 1 within 3 to 2"},
 		{BracketOnUnits, "a unit bracket stands on a value that already has a dimension", "derive a = (2[m])[s]"},

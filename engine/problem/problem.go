@@ -56,18 +56,23 @@ type List struct {
 	found []Problem
 }
 
-// Add reports a problem at a place.
+// Add reports a problem at a place. The same problem is told once; those
+// beyond MostProblems are not told.
 func (l *List) Add(at Placed, code Code, message, suggestion string) {
+	if l.Full() {
+		return
+	}
 	p := Problem{Span: at.At(), Code: code, Message: message, Suggestion: suggestion}
 	for _, known := range l.found {
 		if known == p {
 			return
 		}
 	}
-	if len(l.found) < MostProblems {
-		l.found = append(l.found, p)
-	}
+	l.found = append(l.found, p)
 }
+
+// Full says whether the list takes no more, so that looking on is in vain.
+func (l *List) Full() bool { return len(l.found) >= MostProblems }
 
 // MostProblems bounds how many problems one sheet reports.
 const MostProblems = 500

@@ -127,7 +127,7 @@ func arcSineRemainder(u *big.Float) *big.Float {
 
 // errorRemainder is erf r / r - 1 as a function of u = r^2.
 func errorRemainder(u *big.Float) *big.Float {
-	ratio := number(1)
+	var ratio *big.Float
 	if u.Sign() != 0 {
 		ratio = quo(mul(scaledErrorSeries(sqrt(u)), exponential(zero().Neg(u))), sqrt(u))
 	} else {
