@@ -150,7 +150,10 @@ func TestFiniteRanges(t *testing.T) {
 			continue
 		}
 		dst := make([]float64, rows)
-		l.Body(dst, arguments, &law.Work{})
+		work := &law.Work{}
+		if allocations := testing.AllocsPerRun(2, func() { l.Body(dst, arguments, work) }); allocations > 4 {
+			t.Errorf("%s allocates %v times for %d rows", l.Name, allocations, rows)
+		}
 		for i := range dst {
 			if math.IsInf(dst[i], 0) || math.IsNaN(dst[i]) && l.Refusal == "" {
 				t.Errorf("%s gives %v of %v", l.Name, dst[i], rowOf(arguments, i))

@@ -1,6 +1,8 @@
-// Package fluid holds the laws of liquids at rest: columns of liquid, gauge
-// and absolute pressure, fresh and sea water, the depth of the sea and the
-// gravity that pulls on them.
+// Package fluid holds the laws of fluids at rest: columns of liquid, gauge and
+// absolute pressure, manometers, loads on walls and lift; the gravity that pulls
+// on them; water, steam, ice, sea water and other liquids; moist air and what a
+// balance in it shows; gases breathed under pressure; and first checks of a
+// case that stands it.
 package fluid
 
 import "plumbrule/engine/law"

@@ -203,12 +203,13 @@ func sphereStress(inner, outer, inside, outside, radius float64, component strin
 	rest := (1 - ratio) * (1 + ratio + square)
 	mean := (float64(inside*square*ratio) - outside) / rest
 	reach := inner / radius
-	bend := float64((inside-outside)*(reach*reach*reach)/rest) / 2
+	twice := float64((inside - outside) * (reach * reach * reach) / rest)
+	bend := float64(twice / 2)
 	switch component {
 	case radialStress:
-		return mean - float64(2*bend)
+		return mean - twice
 	case equivalentStress:
 		return 3 * math.Abs(bend)
 	}
-	return mean + float64(bend)
+	return mean + bend
 }

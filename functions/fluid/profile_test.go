@@ -223,3 +223,25 @@ func TestSeaColumnOfStandardOcean(t *testing.T) {
 		near(t, "depth of the standard ocean", depth, c.want, 0.1, unesco44+" p. 28")
 	}
 }
+
+// BenchmarkSeaColumn measures the pressure under one cast, and the depth.
+func BenchmarkSeaColumn(b *testing.B) {
+	depths, salinities, temperatures := castOf(500, 6000, func(z float64) float64 { return 35 }, func(z float64) float64 { return 20 - z/400 })
+	column := block([2]float64{0, 6000})[0]
+	dst := make([]float64, 1024)
+	for name, scale := range map[string]float64{"sea_column_pressure": 1, "sea_column_depth": 1e4} {
+		b.Run(name, func(b *testing.B) {
+			values := append([]float64(nil), column.Values...)
+			for i := range values {
+				values[i] *= scale
+			}
+			arguments := []law.Argument{{Values: values}, {Values: []float64{0.6}}, depths, salinities, temperatures, textOf(scaleITS90)}
+			body, work := lawNamed(b, name).Body, &law.Work{}
+			b.ReportAllocs()
+			for b.Loop() {
+				body(dst, arguments, work)
+			}
+			b.ReportMetric(float64(b.Elapsed().Nanoseconds())/float64(b.N*len(dst)), "ns/row")
+		})
+	}
+}

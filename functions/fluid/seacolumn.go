@@ -15,7 +15,7 @@ func seaColumnLaws() []*law.Law {
 		source = unesco44Source + ", eqs. 15 to 19 and 25; Saunders P.M. (1981) Practical conversion of pressure to depth, J. Phys. Oceanogr. 11, 573-574; Kutta W. (1901) Beitrag zur näherungsweisen Integration totaler Differentialgleichungen, Z. Math. Phys. 46, 435-453"
 	)
 	latitude := law.Parameter{Name: "latitude", Meaning: "geographic latitude, north or south", Unit: "deg", Finite: law.Within(-90, 90)}
-	depths := law.Parameter{Name: "depths", Meaning: "depths of the measurements, from the surface down, each below the one before; above the first its values are taken", Type: law.List, Unit: "m", Finite: law.AtLeast(0)}
+	depths := law.Parameter{Name: "depths", Meaning: "depths of the measurements, from the surface down, each below the one before; above the first its values are taken", Type: law.List, Unit: "m", Finite: law.Within(0, deepestCast)}
 	salinities := practicalSalinity(law.Within(0, 42), law.Within(0, 80))
 	salinities.Name, salinities.Type, salinities.Meaning = "salinities", law.List, "practical salinity at each depth"
 	temperatures := seaTemperature(law.Within(-2, 40), law.Within(-10, 60))
@@ -56,6 +56,9 @@ func seaColumnLaws() []*law.Law {
 	}
 }
 
+// deepestCast bounds the depths of a cast in m, and with it the number of steps.
+const deepestCast = 20000.0
+
 // longestStep is the longest step of the integration in m.
 const longestStep = 250.0
 
@@ -72,8 +75,11 @@ type cast struct {
 // and the scale.
 func seaColumnPressureBody(dst []float64, arguments []law.Argument, work *law.Work) {
 	c := keptCast(work)
+	every := castVaries(arguments)
 	for i := range dst {
-		c.prepare(arguments, i)
+		if i == 0 || every {
+			c.prepare(arguments, i)
+		}
 		dst[i] = pascalsPerDecibar * c.pressureAt(arguments[0].At(i))
 	}
 }
@@ -82,8 +88,11 @@ func seaColumnPressureBody(dst []float64, arguments []law.Argument, work *law.Wo
 // temperatures and the scale.
 func seaColumnDepthBody(dst []float64, arguments []law.Argument, work *law.Work) {
 	c := keptCast(work)
+	every := castVaries(arguments)
 	for i := range dst {
-		c.prepare(arguments, i)
+		if i == 0 || every {
+			c.prepare(arguments, i)
+		}
 		dst[i] = c.depthAt(arguments[0].At(i) / pascalsPerDecibar)
 	}
 }
@@ -98,12 +107,15 @@ func keptCast(work *law.Work) *cast {
 	return c
 }
 
+// castVaries says whether the rows of a call have casts or latitudes of their
+// own.
+func castVaries(arguments []law.Argument) bool {
+	return arguments[1].Varies() || arguments[2].Varies() || arguments[3].Varies() || arguments[4].Varies()
+}
+
 // prepare lays out the cast of a row and integrates it down to its last
-// measurement, unless the row before had the same one.
+// measurement.
 func (c *cast) prepare(arguments []law.Argument, row int) {
-	if row > 0 && !arguments[1].Varies() && !arguments[2].Varies() && !arguments[3].Varies() && !arguments[4].Varies() {
-		return
-	}
 	scale := scaleFactor(&arguments[5])
 	depths, salinities, temperatures := arguments[2].Items, arguments[3].Items, arguments[4].Items
 	n := min(len(depths), len(salinities), len(temperatures))
@@ -113,8 +125,7 @@ func (c *cast) prepare(arguments []law.Argument, row int) {
 	c.ordered = n > 0
 	for k := range n {
 		z := depths[k].At(row)
-		// The bound keeps the number of steps finite.
-		if !(z >= 0 && z <= 20000) || k > 0 && !(z > c.depth[k-1]) {
+		if !(z >= 0 && z <= deepestCast) || k > 0 && !(z > c.depth[k-1]) {
 			c.ordered = false
 			return
 		}

@@ -20,7 +20,7 @@ func seaSoundLaws() []*law.Law {
 		Result:   law.Result{Unit: "m/s"},
 		Equation: "c = C(t, p) + A(t, p) S + B(t, p) S^1.5 + D(p) S^2; S practical_salinity, t temperature in degC on IPTS-68, p sea_pressure in bar; C, A, B, D polynomials of 19, 17, 4 and 2 coefficients",
 		Source:   "Chen C.-T., Millero F.J. (1977) Speed of sound in seawater at high pressures, J. Acoust. Soc. Am. 62, 1129-1135; " + unesco44Source,
-		Caution:  "Standard deviation 0.19 m/s; under high pressure in cold water it lies up to 0.6 m/s above later measurements.",
+		Caution:  "Standard deviation 0.19 m/s; under high pressure in cold water it lies up to 0.9 m/s above sea_sound_speed_gibbs, which rests on later measurements.",
 		Examples: []law.Example{
 			{Formula: `sea_sound_speed(40, 40[degC], 10000[dbar], scale: "IPTS-68")`, Gives: "1731.995 m/s"},
 			{Formula: `sea_sound_speed(35, 10[degC], 2000[dbar], scale: "IPTS-68")`, Gives: "1523.0 m/s"},

@@ -10,6 +10,22 @@ import (
 	"plumbrule/functions/nature"
 )
 
+// loads are the laws whose numbers load a wall, breathing those of gases that
+// people breathe, exact those that follow from definitions and balance alone and
+// hold wherever they mean anything.
+const (
+	loads = " head_pressure pressure_at_depth depth_at_pressure stiff_liquid_pressure stiff_liquid_depth layered_pressure layered_depth " +
+		"profile_liquid_pressure plate_force plate_centre wall_moment sea_pressure_at_depth sea_depth_at_pressure saunders_depth saunders_pressure " +
+		"sea_column_pressure sea_column_depth sea_height_teos sea_pressure_teos water_saturation_pressure water_boiling_temperature ice_melting_pressure " +
+		"water_density water_enthalpy water_internal_energy water_entropy water_heat_capacity water_sound_speed " +
+		"steam_density steam_enthalpy steam_internal_energy steam_entropy steam_heat_capacity steam_sound_speed " +
+		"thick_cylinder_stress thin_cylinder_stress sphere_stress thick_cylinder_wall sphere_wall cylinder_buckling_pressure sphere_buckling_pressure "
+	breathing = " gas_partial_pressure depth_for_partial_pressure breathing_gas_density equivalent_air_depth "
+	exact     = " head_pressure pressure_at_depth depth_at_pressure absolute gauge stiff_liquid_pressure stiff_liquid_depth layered_pressure layered_depth " +
+		"profile_liquid_pressure manometer_difference plate_force plate_centre wall_moment buoyant_force net_buoyancy ballast_for_neutral floating_fraction weighed_density " +
+		"conventional_mass mass_of_conventional thick_cylinder_stress thin_cylinder_stress sphere_stress thick_cylinder_wall sphere_wall depth_for_partial_pressure "
+)
+
 // TestCatalogue asks of every law what pages and checks need.
 func TestCatalogue(t *testing.T) {
 	if _, err := law.NewCatalogue(Laws(), nature.Constants()); err != nil {
@@ -22,8 +38,15 @@ func TestCatalogue(t *testing.T) {
 		if strings.HasSuffix(l.Gives, ".") || strings.HasSuffix(l.Equation, ".") {
 			t.Errorf("%s: a line of its own ends without a full stop", l.Name)
 		}
-		optional := false
+		if cautioned := strings.Contains(l.Caution, law.CautionPressure); cautioned != strings.Contains(loads, " "+l.Name+" ") {
+			t.Errorf("%s: caution of pressure: %v", l.Name, cautioned)
+		}
+		if cautioned := strings.Contains(l.Caution, law.CautionDiving); cautioned != strings.Contains(breathing, " "+l.Name+" ") {
+			t.Errorf("%s: caution of diving: %v", l.Name, cautioned)
+		}
+		optional, bounded := false, false
 		for _, p := range l.Parameters {
+			bounded = bounded || p.Valid.Bounded()
 			if p.Name == "" || p.Meaning == "" || p.Type != law.Text && p.Unit == "" {
 				t.Errorf("%s: parameter %q is not fully told", l.Name, p.Name)
 			}
@@ -37,6 +60,9 @@ func TestCatalogue(t *testing.T) {
 			if p.Type == law.Text && len(p.Choices) == 0 && p.CheckText == nil {
 				t.Errorf("%s: %s takes any text", l.Name, p.Name)
 			}
+		}
+		if !bounded && !strings.Contains(exact, " "+l.Name+" ") {
+			t.Errorf("%s: fitted to measurements, yet without a range", l.Name)
 		}
 	}
 }
@@ -66,7 +92,7 @@ var spans = map[string][2]float64{
 	"floating_fraction object_density": {200, 800}, "floating_fraction fluid_density": {800, 1100},
 	"ballast_for_neutral fluid_density": {800, 1100}, "ballast_for_neutral ballast_density": {2000, 9000},
 	"moist_air_density humidity": {0, 1}, "depth_at_pressure pressure": {2e5, 9e7},
-	"water_density pressure": {4e6, 1e8}, "steam_density pressure": {100, 1e3},
+	"water_density pressure":        {4e6, 1e8},
 	"profile_liquid_pressure depth": {0, 20}, "profile_liquid_pressure depths": {0, 100},
 	"sea_column_pressure depth": {0, 2000}, "sea_column_pressure depths": {0, 6000}, "sea_column_depth sea_pressure": {0, 2e7}, "sea_column_depth depths": {0, 6000},
 }
@@ -76,6 +102,9 @@ func spanOf(t *testing.T, l *law.Law, p *law.Parameter) [2]float64 {
 	t.Helper()
 	if span, ok := spans[l.Name+" "+p.Name]; ok {
 		return span
+	}
+	if strings.HasPrefix(l.Name, "steam_") && p.Name == "pressure" {
+		return [2]float64{100, 600} // below saturation at every temperature
 	}
 	u, err := unit.Parse(p.Unit)
 	if err != nil {
@@ -115,6 +144,7 @@ func TestShapes(t *testing.T) {
 			texts = longer
 		}
 		masks := min(1<<len(varying), 32)
+		answered, refused := 0, 0
 		for _, chosen := range texts {
 			for mask := range masks {
 				arguments := make([]law.Argument, len(l.Parameters))
@@ -154,11 +184,20 @@ func TestShapes(t *testing.T) {
 				for i := range dst {
 					alone := []float64{0}
 					l.Body(alone, rowOf(arguments, i), &law.Work{})
-					if math.IsNaN(dst[i]) && l.Refusal == "" || math.IsInf(dst[i], 0) || !math.IsNaN(dst[i]) && math.Float64bits(alone[0]) != math.Float64bits(dst[i]) {
+					same := math.Float64bits(alone[0]) == math.Float64bits(dst[i]) || math.IsNaN(alone[0]) && math.IsNaN(dst[i])
+					if math.IsNaN(dst[i]) {
+						refused++
+					} else {
+						answered++
+					}
+					if math.IsNaN(dst[i]) && l.Refusal == "" || math.IsInf(dst[i], 0) || !same {
 						t.Fatalf("%s %v, shape %b, row %d: %v alone, %v in a block, of %v", l.Name, chosen, mask, i, alone[0], dst[i], rowOf(arguments, i))
 					}
 				}
 			}
+		}
+		if answered < refused {
+			t.Errorf("%s refuses %d rows and answers %d: its spans say little", l.Name, refused, answered)
 		}
 	}
 }
@@ -175,4 +214,44 @@ func rowOf(arguments []law.Argument, i int) []law.Argument {
 		}
 	}
 	return row
+}
+
+// TestBadArguments runs every body with numbers that no law can take: none
+// panics, hangs or allocates for each row.
+func TestBadArguments(t *testing.T) {
+	bad := []float64{math.NaN(), math.Inf(1), math.Inf(-1), 0, -1, 1, 1e-300, 1e300, -1e300, math.MaxFloat64, 273.15, 1e5}
+	const rows = 1024
+	for _, l := range Laws() {
+		arguments := make([]law.Argument, len(l.Parameters))
+		for j := range l.Parameters {
+			p := &l.Parameters[j]
+			column := make([]float64, rows)
+			for i := range column {
+				column[i] = bad[(i*(2*j+1)+i/len(bad)*j)%len(bad)]
+			}
+			switch p.Type {
+			case law.Text:
+				arguments[j].Text = p.Choices[len(p.Choices)-1]
+			case law.List:
+				arguments[j].Items = []law.Argument{{Values: column}, {Values: bad[3:4]}, {Values: column}}
+			default:
+				arguments[j].Values = column
+			}
+		}
+		dst, work := make([]float64, rows), &law.Work{}
+		if allocations := testing.AllocsPerRun(2, func() { l.Body(dst, arguments, work) }); allocations > 4 {
+			t.Errorf("%s allocates %v times for %d rows", l.Name, allocations, rows)
+		}
+		for j := range arguments {
+			arguments[j].Items = nil // an empty list
+		}
+		l.Body(dst, arguments, work)
+		// A text that is no choice never gets here, but must not hurt.
+		for j := range arguments {
+			if l.Parameters[j].Type == law.Text {
+				arguments[j].Text = "nothing"
+			}
+		}
+		l.Body(dst, arguments, work)
+	}
 }

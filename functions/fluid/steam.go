@@ -174,68 +174,68 @@ type state struct {
 }
 
 // liquidProperty makes a law's function of a property of region 1.
-func liquidProperty(of func(s *state) float64) func(temperature, pressure float64) float64 {
+func liquidProperty(of func(s state) float64) func(temperature, pressure float64) float64 {
 	return func(temperature, pressure float64) float64 {
 		if !isLiquid(temperature, pressure) {
 			return math.NaN()
 		}
-		return of(&state{temperature, pressure, liquidGibbs(temperature, pressure)})
+		return of(state{temperature, pressure, liquidGibbs(temperature, pressure)})
 	}
 }
 
 // steamProperty makes a law's function of a property of region 2.
-func steamProperty(of func(s *state) float64) func(temperature, pressure float64) float64 {
+func steamProperty(of func(s state) float64) func(temperature, pressure float64) float64 {
 	return func(temperature, pressure float64) float64 {
 		if !isSteam(temperature, pressure) {
 			return math.NaN()
 		}
-		return of(&state{temperature, pressure, steamGibbs(temperature, pressure)})
+		return of(state{temperature, pressure, steamGibbs(temperature, pressure)})
 	}
 }
 
 // Properties in coherent SI units (tables 3 and 12 of the release). With tau =
 // T*/T, R T tau = R T*; with pi = p/p*, p/pi = p*.
 
-func liquidEnthalpy(s *state) float64 { return steamGasConstant * liquidTemperature * s.t }
-func steamEnthalpy(s *state) float64  { return steamGasConstant * steamTemperature * s.t }
+func liquidEnthalpy(s state) float64 { return steamGasConstant * liquidTemperature * s.t }
+func steamEnthalpy(s state) float64  { return steamGasConstant * steamTemperature * s.t }
 
-func liquidEnergy(s *state) float64 {
+func liquidEnergy(s state) float64 {
 	flow := float64(s.pressure/liquidPressure) * s.p
 	return steamGasConstant * (float64(liquidTemperature*s.t) - float64(s.temperature*flow))
 }
 
-func steamEnergy(s *state) float64 {
+func steamEnergy(s state) float64 {
 	flow := float64(s.pressure/steamPressure) * s.p
 	return steamGasConstant * (float64(steamTemperature*s.t) - float64(s.temperature*flow))
 }
 
-func liquidEntropy(s *state) float64 {
+func liquidEntropy(s state) float64 {
 	return steamGasConstant * (float64(liquidTemperature/s.temperature*s.t) - s.value)
 }
 
-func steamEntropy(s *state) float64 {
+func steamEntropy(s state) float64 {
 	value := s.value + column.Ln(s.pressure/steamPressure)
 	return steamGasConstant * (float64(steamTemperature/s.temperature*s.t) - value)
 }
 
-func liquidHeat(s *state) float64 {
+func liquidHeat(s state) float64 {
 	tau := liquidTemperature / s.temperature
 	return -steamGasConstant * tau * tau * s.tt
 }
 
-func steamHeat(s *state) float64 {
+func steamHeat(s state) float64 {
 	tau := steamTemperature / s.temperature
 	return -steamGasConstant * tau * tau * s.tt
 }
 
-func steamDensity(s *state) float64 {
+func steamDensity(s state) float64 {
 	return steamPressure / (steamGasConstant * s.temperature * s.p)
 }
 
 // soundSpeed makes the speed of sound in m/s of the region reduced by a
 // temperature in K.
-func soundSpeed(reducing float64) func(s *state) float64 {
-	return func(s *state) float64 {
+func soundSpeed(reducing float64) func(s state) float64 {
+	return func(s state) float64 {
 		tau := reducing / s.temperature
 		mixed := s.p - float64(tau*s.pt)
 		bend := float64(mixed*mixed)/float64(tau*tau*s.tt) - s.pp

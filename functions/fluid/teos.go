@@ -87,34 +87,34 @@ func teosLaws() []*law.Law {
 		example                     law.Example
 		salt                        law.Range
 		hottest                     float64 // degC
-		of                          func(g *seaGibbs, temperature float64) float64
+		of                          func(g seaGibbs, temperature float64) float64
 	}
 	fresh, salty := law.Within(0, 120), law.Range{Low: 0, High: 120, HasLow: true, HasHigh: true, LowOpen: true}
 	for _, p := range []property{
 		{
 			"sea_gibbs_energy", "specific Gibbs energy of sea water by TEOS-10", "J/kg", "",
 			law.Example{Formula: "sea_gibbs_energy(0[g/kg], 313.15[K], 0[dbar])", Gives: "-11619.8898 J/kg"}, fresh, 80,
-			func(g *seaGibbs, _ float64) float64 { return g.value },
+			func(g seaGibbs, _ float64) float64 { return g.value },
 		},
 		{
 			"sea_water_density_gibbs", "density of sea water by TEOS-10 from the temperature in place", "kg/m^3", "rho = 1/(dg/dp); ",
 			law.Example{Formula: "sea_water_density_gibbs(0[g/kg], 313.15[K], 0[dbar])", Gives: "992.216354 kg/m^3"}, fresh, 80,
-			func(g *seaGibbs, _ float64) float64 { return 1 / g.p },
+			func(g seaGibbs, _ float64) float64 { return 1 / g.p },
 		},
 		{
 			"sea_entropy", "specific entropy of sea water by TEOS-10", "J/(kg K)", "s = -dg/dT; ",
 			law.Example{Formula: "sea_entropy(0[g/kg], 313.15[K], 0[dbar])", Gives: "572.365181 J/(kg K)"}, fresh, 80,
-			func(g *seaGibbs, _ float64) float64 { return -g.t },
+			func(g seaGibbs, _ float64) float64 { return -g.t },
 		},
 		{
 			"sea_enthalpy", "specific enthalpy of sea water by TEOS-10", "J/kg", "h = g - T dg/dT; ",
 			law.Example{Formula: "sea_enthalpy(0[g/kg], 273.15[K], 0[dbar])", Gives: "61.0136242 J/kg"}, fresh, 80,
-			func(g *seaGibbs, temperature float64) float64 { return g.value - float64(temperature*g.t) },
+			func(g seaGibbs, temperature float64) float64 { return g.value - float64(temperature*g.t) },
 		},
 		{
 			"sea_heat_capacity_gibbs", "specific heat capacity of sea water at constant pressure by TEOS-10", "J/(kg K)", "c_p = -T d2g/dT2; ",
 			law.Example{Formula: "sea_heat_capacity_gibbs(0[g/kg], 313.15[K], 0[dbar])", Gives: "4179.42416 J/(kg K)"}, fresh, 50,
-			func(g *seaGibbs, temperature float64) float64 { return -temperature * g.tt },
+			func(g seaGibbs, temperature float64) float64 { return -temperature * g.tt },
 		},
 		{
 			"sea_sound_speed_gibbs", "speed of sound in sea water by TEOS-10", "m/s", "c = (dg/dp) sqrt[g_TT/(g_Tp^2 - g_TT g_pp)]; ",
@@ -124,22 +124,22 @@ func teosLaws() []*law.Law {
 		{
 			"sea_compressibility", "isothermal compressibility of sea water by TEOS-10", "1/GPa", "kappa_T = -(d2g/dp2)/(dg/dp); ",
 			law.Example{Formula: "sea_compressibility(0[g/kg], 273.15[K], 0[dbar]) / sea_water_density_gibbs(0[g/kg], 273.15[K], 0[dbar])", Gives: "5.08915308e-13 m^3/(kg Pa)"}, fresh, 50,
-			func(g *seaGibbs, _ float64) float64 { return -g.pp / g.p },
+			func(g seaGibbs, _ float64) float64 { return -g.pp / g.p },
 		},
 		{
 			"sea_thermal_expansion", "coefficient of thermal expansion of sea water by TEOS-10, at constant salinity and pressure", "1/K", "alpha = (d2g/dTdp)/(dg/dp); ",
 			law.Example{Formula: "sea_thermal_expansion(0[g/kg], 313.15[K], 0[dbar]) / sea_water_density_gibbs(0[g/kg], 313.15[K], 0[dbar])", Gives: "3.88499694e-7 m^3/(kg K)"}, fresh, 50,
-			func(g *seaGibbs, _ float64) float64 { return g.tp / g.p },
+			func(g seaGibbs, _ float64) float64 { return g.tp / g.p },
 		},
 		{
 			"sea_haline_contraction", "relative increase of the density of sea water with absolute salinity by TEOS-10", "kg/g", "beta = -(d2g/dS_Adp)/(dg/dp); ",
 			law.Example{Formula: "-sea_haline_contraction(35.16504[g/kg], 273.15[K], 0[dbar]) / sea_water_density_gibbs(35.16504[g/kg], 273.15[K], 0[dbar])", Gives: "-7.59615412e-7 m^3/g"}, salty, 80,
-			func(g *seaGibbs, _ float64) float64 { return -g.sp / g.p },
+			func(g seaGibbs, _ float64) float64 { return -g.sp / g.p },
 		},
 		{
 			"sea_chemical_potential", "chemical potential of the salt in sea water relative to that of the water, by TEOS-10", "J/g", "mu = dg/dS_A; ",
 			law.Example{Formula: "sea_chemical_potential(100[g/kg], 353[K], 0[dbar])", Gives: "251.957276 J/g"}, salty, 80,
-			func(g *seaGibbs, _ float64) float64 { return g.s },
+			func(g seaGibbs, _ float64) float64 { return g.s },
 		},
 	} {
 		of := p.of
@@ -150,7 +150,7 @@ func teosLaws() []*law.Law {
 			Examples: []law.Example{p.example},
 			Body: law.Of3(func(salinity, temperature, pressure float64) float64 {
 				g := seaGibbsAt(salinity, temperature, pressure)
-				return of(&g, temperature)
+				return of(g, temperature)
 			}),
 		})
 	}
@@ -162,7 +162,7 @@ func teosLaws() []*law.Law {
 const saltPerPractical = 35.16504e-3 / 35
 
 // gibbsSoundSpeed gives the speed of sound in m/s.
-func gibbsSoundSpeed(g *seaGibbs, _ float64) float64 {
+func gibbsSoundSpeed(g seaGibbs, _ float64) float64 {
 	return g.p * math.Sqrt(g.tt/(float64(g.tp*g.tp)-float64(g.tt*g.pp)))
 }
 
@@ -171,7 +171,7 @@ func gibbsSoundSpeed(g *seaGibbs, _ float64) float64 {
 const conservativeHeat = 3991.86795711963
 
 // potentialEnthalpy gives the enthalpy in J/kg at the surface's pressure.
-func potentialEnthalpy(g *seaGibbs, temperature float64) float64 {
+func potentialEnthalpy(g seaGibbs, temperature float64) float64 {
 	return g.value - float64(temperature*g.t)
 }
 
@@ -195,7 +195,7 @@ func conservativeTemperature(salinity, temperature, pressure float64) float64 {
 	g := seaGibbsAt(salinity, temperature, pressure)
 	potential := temperatureOfEntropy(salinity, -g.t, 0, temperature)
 	g = seaGibbsAt(salinity, potential, 0)
-	return potentialEnthalpy(&g, potential)/conservativeHeat + nature.IcePoint
+	return potentialEnthalpy(g, potential)/conservativeHeat + nature.IcePoint
 }
 
 // temperatureInPlace gives the temperature in place in K from the conservative
@@ -208,7 +208,7 @@ func temperatureInPlace(salinity, conservative, pressure float64) float64 {
 	g := seaGibbsAt(salinity, potential, 0)
 	for range 4 {
 		// dh/dT = -T g_TT
-		potential += float64(potentialEnthalpy(&g, potential)-enthalpy) / float64(potential*g.tt)
+		potential += float64(potentialEnthalpy(g, potential)-enthalpy) / float64(potential*g.tt)
 		g = seaGibbsAt(salinity, potential, 0)
 	}
 	return temperatureOfEntropy(salinity, -g.t, pressure, potential)
