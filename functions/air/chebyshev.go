@@ -45,7 +45,7 @@ func (s *sampling) integral(values *[samples]float64, scale float64) series {
 	}
 	// The integral of T_k is T_(k+1)/(2(k+1)) - T_(k-1)/(2(k-1)).
 	var b series
-	b[1] = scale * (c[0] - float64(c[2]/2))
+	b[1] = float64(scale * (c[0] - float64(c[2]/2)))
 	for k := 2; k <= samples; k++ {
 		b[k] = scale * (c[k-1] - c[k+1]) / float64(2*k)
 	}

@@ -9,48 +9,48 @@ import (
 )
 
 // gasLaws are those of ideal gases and their mixtures.
-func gasLaws() []*law.Law {
-	const ideal = "An ideal gas: 0.1 % off for air at the ground, some percent near condensation or above 10 bar; give a compressibility there."
-	const source = "Clapeyron E. (1834) J. Ecole Polytech. 14, 153; Atkins P., de Paula J. (2014) Physical Chemistry, 10th ed., section 1A; R of CODATA 2022, exact"
-	compressibility := law.Parameter{
-		Name: "compressibility", Meaning: "compressibility factor Z of the gas there: 1 for an ideal gas", Unit: "1", Valid: law.Within(0.2, 4), Finite: law.Above(0), Default: "1",
-	}
-	return []*law.Law{
-		{
-			Name: "gas_density", Group: group, Gives: "the density of a gas",
-			Parameters: []law.Parameter{pressureOrNone(), temperatureOfGas(), meanMolarMass(), compressibility},
-			Result:     law.Result{Unit: "kg/m^3"}, Equation: "rho = p M/(Z R T); p pressure, Z compressibility", Source: source, Caution: ideal,
-			Examples: []law.Example{{Formula: "gas_density(92.10[bar], 735.3[K], 43.44[g/mol], compressibility: 1.0100)", Gives: "64.8 kg/m^3"}},
-			Body:     law.Of4(func(p, t, m, z float64) float64 { return p * m / (z * nature.MolarGasConstant * t) }),
+var gasLaws = []*law.Law{
+	{
+		Name: "gas_density", Group: group, Gives: "the density of a gas",
+		Parameters: []law.Parameter{pressureOrNone(), temperatureOfGas(), meanMolarMass(), gasCompressibility},
+		Result:     law.Result{Unit: "kg/m^3"}, Equation: "rho = p M/(Z R T); p pressure, Z compressibility", Source: gasSource, Caution: gasIdeal,
+		Examples: []law.Example{{Formula: "gas_density(92.10[bar], 735.3[K], 43.44[g/mol], compressibility: 1.0100)", Gives: "64.8 kg/m^3"}},
+		Body:     of4(func(p, t, m, z float64) float64 { return p * m / (z * nature.MolarGasConstant * t) }),
+	},
+	{
+		Name: "gas_number_density", Group: group, Gives: "the number of particles of a gas in a volume",
+		Parameters: []law.Parameter{pressureOrNone(), temperatureOfGas()},
+		Result:     law.Result{Unit: "m^-3"}, Equation: "n = p/(k_B T); p pressure", Source: gasSource, Caution: gasIdeal,
+		Examples: []law.Example{{Formula: "gas_number_density(101325[Pa], 273.15[K])", Gives: "2.6867801e25 m^-3"}},
+		Body:     of2(func(p, t float64) float64 { return p / (nature.BoltzmannConstant * t) }),
+	},
+	{
+		Name: "molar_volume", Group: group, Gives: "the volume of one mole of a gas",
+		Parameters: []law.Parameter{pressureOfGas(), temperatureOfGas()},
+		Result:     law.Result{Unit: "m^3/mol"}, Equation: "V_m = R T/p; p pressure", Source: gasSource, Caution: gasIdeal,
+		Examples: []law.Example{{Formula: "molar_volume(101325[Pa], 273.15[K])", Gives: "22.413970e-3 m^3/mol"}},
+		Body:     of2(func(p, t float64) float64 { return nature.MolarGasConstant * t / p }),
+	},
+	{
+		Name: "column_amount", Group: group, Gives: "the amount of gas in the whole column above an area",
+		Parameters: []law.Parameter{
+			{Name: "surface_pressure", Meaning: "absolute pressure at the foot of the column", Unit: "Pa(a)", Finite: law.AtLeast(0)},
+			meanMolarMass(), gravityOfColumn(),
 		},
-		{
-			Name: "gas_number_density", Group: group, Gives: "the number of particles of a gas in a volume",
-			Parameters: []law.Parameter{pressureOrNone(), temperatureOfGas()},
-			Result:     law.Result{Unit: "m^-3"}, Equation: "n = p/(k_B T); p pressure", Source: source, Caution: ideal,
-			Examples: []law.Example{{Formula: "gas_number_density(101325[Pa], 273.15[K])", Gives: "2.6867801e25 m^-3"}},
-			Body:     law.Of2(func(p, t float64) float64 { return p / (nature.BoltzmannConstant * t) }),
-		},
-		{
-			Name: "molar_volume", Group: group, Gives: "the volume of one mole of a gas",
-			Parameters: []law.Parameter{pressureOfGas(), temperatureOfGas()},
-			Result:     law.Result{Unit: "m^3/mol"}, Equation: "V_m = R T/p; p pressure", Source: source, Caution: ideal,
-			Examples: []law.Example{{Formula: "molar_volume(101325[Pa], 273.15[K])", Gives: "22.413970e-3 m^3/mol"}},
-			Body:     law.Of2(func(p, t float64) float64 { return nature.MolarGasConstant * t / p }),
-		},
-		{
-			Name: "column_amount", Group: group, Gives: "the amount of gas in the whole column above an area",
-			Parameters: []law.Parameter{
-				{Name: "surface_pressure", Meaning: "absolute pressure at the foot of the column", Unit: "Pa(a)", Finite: law.AtLeast(0)},
-				meanMolarMass(), gravityOfColumn(),
-			},
-			Result: law.Result{Unit: "mol/m^2"}, Equation: "N = p_s/(M g); p_s surface_pressure",
-			Source:   "hydrostatic equation; Wallace J.M., Hobbs P.V. (2006) Atmospheric Science, 2nd ed., section 3.2",
-			Caution:  "One gravity over the whole height: true amounts are 0.3 % larger on Earth.",
-			Examples: []law.Example{{Formula: "column_amount(9.80665[Pa], 1[kg/mol])", Gives: "1 mol/m^2"}},
-			Body:     law.Of3(func(p, m, g float64) float64 { return p / (m * g) }),
-		},
-		mixtureLaw,
-	}
+		Result: law.Result{Unit: "mol/m^2"}, Equation: "N = p_s/(M g); p_s surface_pressure",
+		Source:   "hydrostatic equation; Wallace J.M., Hobbs P.V. (2006) Atmospheric Science, 2nd ed., section 3.2",
+		Caution:  "One gravity over the whole height: true amounts are 0.3 % larger on Earth.",
+		Examples: []law.Example{{Formula: "column_amount(9.80665[Pa], 1[kg/mol])", Gives: "1 mol/m^2"}},
+		Body:     of3(func(p, m, g float64) float64 { return p / (m * g) }),
+	},
+	mixtureLaw,
+}
+
+const gasIdeal = "An ideal gas: 0.1 % off for air at the ground, some percent near condensation or above 10 bar; give a compressibility there."
+const gasSource = "Clapeyron E. (1834) J. Ecole Polytech. 14, 153; Atkins P., de Paula J. (2014) Physical Chemistry, 10th ed., section 1A; R of CODATA 2022, exact"
+
+var gasCompressibility = law.Parameter{
+	Name: "compressibility", Meaning: "compressibility factor Z of the gas there: 1 for an ideal gas", Unit: "1", Valid: law.Within(0.2, 4), Finite: law.Above(0), Default: "1",
 }
 
 func pressureOrNone() law.Parameter {
@@ -217,7 +217,7 @@ func transportLaws() []*law.Law {
 			Equation:   "k_t = 2.64638e-3 T^1.5/(T + 245.4 10^(-12/T)), T in K", Source: standardSource + ", equation 53",
 			Caution:  "Agrees with handbooks within 1 % from 200 to 500 K. Dry air in bulk: where the mean free path is no longer small against the gap, less heat passes.",
 			Examples: []law.Example{{Formula: "air_conductivity(288.15[K])", Gives: "2.5326e-2 W/(m K)"}},
-			Body:     law.Of1(func(t float64) float64 { return conductivityOfAir(t, standardConductivityCoefficient) }),
+			Body:     of1(func(t float64) float64 { return conductivityOfAir(t, standardConductivityCoefficient) }),
 		},
 	}
 }

@@ -28,8 +28,10 @@ var icao = atmosphere{layers: standardLayers(icaoGasConstant)}
 
 // ofICAO lifts a function of the layer and the geopotential height to a law's
 // function of the height alone.
+//
+//go:noinline
 func ofICAO(f func(l *layer, altitude float64) float64) law.Body {
-	return law.Of1(func(altitude float64) float64 {
+	return of1(func(altitude float64) float64 {
 		if !(altitude >= lowestGeopotential && altitude <= icaoTop) {
 			return notANumber
 		}

@@ -1,8 +1,10 @@
-// Package air is the room of gas columns and the standard atmosphere: how
-// pressure and density fall with height in an isothermal column and in one
-// whose temperature changes linearly, geometric and geopotential height, the
-// U.S. Standard Atmosphere 1976 from -5 km to 86 km, and its inverses, pressure
-// altitude and density altitude.
+// Package air is the room of everything above the ground: gas columns of one or
+// of a changing temperature, profiles of one's own, geometric and geopotential
+// height, the U.S. Standard Atmosphere 1976 from -5 km to 1000 km and the ICAO
+// standard atmosphere, altimetry, humidity, ideal gases and their viscosity,
+// kinetic theory and vacuum, escape and separation of gases, the same
+// exponential law for suspended particles and rotors, and the atmospheres of
+// other worlds.
 package air
 
 import "plumbrule/engine/law"
@@ -31,21 +33,21 @@ func Laws() []*law.Law {
 	for _, part := range [][]*law.Law{
 		standardGasLaws(),
 		icaoLaws(),
-		columnHeightLaws(),
-		localGeopotentialLaws(),
-		altimetryLaws(),
-		escapeLaws(),
-		sedimentLaws(),
-		profileLaws(),
+		columnHeightLaws,
+		localGeopotentialLaws,
+		altimetryLaws,
+		escapeLaws,
+		sedimentLaws,
+		profileLaws,
 		worldLaws(),
-		separationLaws(),
-		saturationLaws(),
-		kineticLaws(),
+		separationLaws,
+		saturationLaws,
+		kineticLaws,
 		vacuumLaws(),
-		gasLaws(),
+		gasLaws,
 		transportLaws(),
-		humidityLaws(),
-		psychrometerLaws(),
+		humidityLaws,
+		psychrometerLaws,
 	} {
 		laws = append(laws, part...)
 	}

@@ -34,7 +34,7 @@ func (p *profile) size(n int) {
 // is integrated over.
 func (p *profile) levelOf(height float64) float64 {
 	if p.inverse {
-		return height * (p.radius / (p.radius + height))
+		return float64(height * (p.radius / (p.radius + height)))
 	}
 	return height
 }
@@ -78,7 +78,7 @@ func (p *profile) change(level int, distance float64) float64 {
 	if x == 0 {
 		return depth
 	}
-	return depth * (column.Log1p(x) / x)
+	return float64(depth * (column.Log1p(x) / x))
 }
 
 // levelBelow finds the last level at or below a height by halving; -1 where
@@ -116,6 +116,8 @@ const inverseSquare = "inverse square"
 
 // profileBody reads the profile once a block where no level changes from row
 // to row, and hands pressure, temperature and molar mass to what is asked.
+//
+//go:noinline
 func profileBody(give func(pressure, temperature, molarMass float64) float64) law.Body {
 	return func(dst []float64, arguments []law.Argument, work *law.Work) {
 		p, _ := work.Keep.(*profile)
@@ -138,43 +140,43 @@ func profileBody(give func(pressure, temperature, molarMass float64) float64) la
 }
 
 // profileLaws integrate the hydrostatic equation over a profile of one's own.
-func profileLaws() []*law.Law {
-	parameters := func() []law.Parameter {
-		return []law.Parameter{
-			{Name: "heights", Meaning: "heights of the levels above the zero of height, rising", Type: law.List, Unit: "m", Accepts: []law.Conversion{{Unit: "gpm", Factor: 1}}},
-			{Name: "temperatures", Meaning: "temperature at each level, for moist air its virtual temperature; linear between levels", Type: law.List, Unit: "K", Finite: law.Above(0)},
-			{Name: "base_pressure", Meaning: "absolute pressure at the first level", Unit: "Pa(a)", Finite: law.AtLeast(0)},
-			{Name: "height", Meaning: "height asked for, within the levels", Unit: "m", Accepts: []law.Conversion{{Unit: "gpm", Factor: 1}}},
-			{Name: "molar_mass", Meaning: "mean molar mass of the gas, one over the whole height", Unit: "g/mol", Finite: law.Above(0), Default: "28.9644[g/mol]"},
-			{Name: "gravity_model", Meaning: "gravity constant over the height, as with geopotential heights, or falling with the square of the distance from the body's centre", Type: law.Text, Default: `"constant"`, Choices: []string{"constant", inverseSquare}},
-			{Name: "gravity", Meaning: "acceleration of gravity, at the zero of height", Unit: "m/s^2", Finite: law.Above(0), Default: "nature.g_n"},
-			{Name: "radius", Meaning: "distance of the zero of height from the body's centre, for the inverse square", Unit: "km", Finite: law.Above(0), Default: "6356.766[km]"},
-		}
-	}
-	const (
-		source  = "hydrostatic equation and ideal gas; as U.S. Standard Atmosphere, 1976, equations 33a and 33b, with levels of one's own; Wallace J.M., Hobbs P.V. (2006) Atmospheric Science, 2nd ed., section 3.2"
-		layers  = "in each layer p = p_b (T/T_b)^(-g M/(R L)), or p_b exp(-g M (h - h_b)/(R T_b)) where L = 0; L = dT/dh; with the inverse square h is the geopotential height r z/(r + z) and T linear in it"
-		refusal = "the height lies outside the levels, the levels do not rise, or a list has another length than the other"
-		caution = "Ideal gas at rest of one composition: take virtual temperatures for moist air."
-	)
-	return []*law.Law{
-		{
-			Name: "profile_pressure", Group: group, Gives: "the pressure at a height in a column of a measured or designed temperature profile",
-			Parameters: parameters(), Result: law.Result{Unit: "Pa(a)"}, Equation: layers, Source: source, Caution: caution, Refusal: refusal,
-			Examples: []law.Example{
-				{Formula: "profile_pressure([0, 11000, 20000][gpm], [288.15, 216.65, 216.65][K], 101325[Pa], 20000[gpm], molar_mass: 28.9644[g/mol]*nature.R/8.31432[J/(mol K)])", Gives: "5474.89 Pa"},
-			},
-			Body: profileBody(func(pressure, _, _ float64) float64 { return pressure }),
+var profileLaws = []*law.Law{
+	{
+		Name: "profile_pressure", Group: group, Gives: "the pressure at a height in a column of a measured or designed temperature profile",
+		Parameters: profileParameters(), Result: law.Result{Unit: "Pa(a)"}, Equation: profileLayers, Source: profileSource, Caution: profileCaution, Refusal: profileRefusal,
+		Examples: []law.Example{
+			{Formula: "profile_pressure([0, 11000, 20000][gpm], [288.15, 216.65, 216.65][K], 101325[Pa], 20000[gpm], molar_mass: 28.9644[g/mol]*nature.R/8.31432[J/(mol K)])", Gives: "5474.89 Pa"},
 		},
-		{
-			Name: "profile_density", Group: group, Gives: "the density at a height in a column of a measured or designed temperature profile",
-			Parameters: parameters(), Result: law.Result{Unit: "kg/m^3"}, Equation: "rho = p M/(R T); " + layers, Source: source, Caution: caution, Refusal: refusal,
-			Examples: []law.Example{
-				{Formula: "profile_density([0, 11000][gpm], [288.15, 216.65][K], 101325[Pa], 11000[gpm], molar_mass: 28.9644[g/mol]*nature.R/8.31432[J/(mol K)])", Gives: "0.363918 kg/m^3"},
-			},
-			Body: profileBody(func(pressure, temperature, molarMass float64) float64 {
-				return pressure * molarMass / (nature.MolarGasConstant * temperature)
-			}),
+		Body: profileBody(func(pressure, _, _ float64) float64 { return pressure }),
+	},
+	{
+		Name: "profile_density", Group: group, Gives: "the density at a height in a column of a measured or designed temperature profile",
+		Parameters: profileParameters(), Result: law.Result{Unit: "kg/m^3"}, Equation: "rho = p M/(R T); " + profileLayers, Source: profileSource, Caution: profileCaution, Refusal: profileRefusal,
+		Examples: []law.Example{
+			{Formula: "profile_density([0, 11000][gpm], [288.15, 216.65][K], 101325[Pa], 11000[gpm], molar_mass: 28.9644[g/mol]*nature.R/8.31432[J/(mol K)])", Gives: "0.363918 kg/m^3"},
 		},
+		Body: profileBody(func(pressure, temperature, molarMass float64) float64 {
+			return pressure * molarMass / (nature.MolarGasConstant * temperature)
+		}),
+	},
+}
+
+func profileParameters() []law.Parameter {
+	return []law.Parameter{
+		{Name: "heights", Meaning: "heights of the levels above the zero of height, rising", Type: law.List, Unit: "m", Accepts: []law.Conversion{{Unit: "gpm", Factor: 1}}},
+		{Name: "temperatures", Meaning: "temperature at each level, for moist air its virtual temperature; linear between levels", Type: law.List, Unit: "K", Finite: law.Above(0)},
+		{Name: "base_pressure", Meaning: "absolute pressure at the first level", Unit: "Pa(a)", Finite: law.AtLeast(0)},
+		{Name: "height", Meaning: "height asked for, within the levels", Unit: "m", Accepts: []law.Conversion{{Unit: "gpm", Factor: 1}}},
+		{Name: "molar_mass", Meaning: "mean molar mass of the gas, one over the whole height", Unit: "g/mol", Finite: law.Above(0), Default: "28.9644[g/mol]"},
+		{Name: "gravity_model", Meaning: "gravity constant over the height, as with geopotential heights, or falling with the square of the distance from the body's centre", Type: law.Text, Default: `"constant"`, Choices: []string{"constant", inverseSquare}},
+		{Name: "gravity", Meaning: "acceleration of gravity, at the zero of height", Unit: "m/s^2", Finite: law.Above(0), Default: "nature.g_n"},
+		{Name: "radius", Meaning: "distance of the zero of height from the body's centre, for the inverse square", Unit: "km", Finite: law.Above(0), Default: "6356.766[km]"},
 	}
 }
+
+const (
+	profileSource  = "hydrostatic equation and ideal gas; as U.S. Standard Atmosphere, 1976, equations 33a and 33b, with levels of one's own; Wallace J.M., Hobbs P.V. (2006) Atmospheric Science, 2nd ed., section 3.2"
+	profileLayers  = "in each layer p = p_b (T/T_b)^(-g M/(R L)), or p_b exp(-g M (h - h_b)/(R T_b)) where L = 0; L = dT/dh; with the inverse square h is the geopotential height r z/(r + z) and T linear in it"
+	profileRefusal = "the height lies outside the levels, the levels do not rise, or a list has another length than the other"
+	profileCaution = "Ideal gas at rest of one composition: take virtual temperatures for moist air."
+)

@@ -22,66 +22,64 @@ const (
 )
 
 // saturationLaws are the saturation pressures and their inverses.
-func saturationLaws() []*law.Law {
-	return []*law.Law{
-		{
-			Name: "saturation_pressure_over_water", Group: group,
-			Gives: "the pressure of water vapour in equilibrium with liquid water, supercooled below 0 degC",
-			Parameters: []law.Parameter{
-				{Name: "temperature", Meaning: "temperature of the water", Unit: "K", Valid: law.Within(123, 647.096), Finite: law.Within(123, 647.096)},
-				methodParameter(overWater, "water"), scaleParameter(),
-			},
-			Result: law.Result{Unit: "Pa(a)"}, Equation: waterEquation, Source: waterSource, Caution: pureCaution, Refusal: ownRange,
-			Examples: []law.Example{
-				{Formula: "saturation_pressure_over_water(0.01[degC])", Gives: "611.657 Pa"},
-				{Formula: `saturation_pressure_over_water(30[degC], method: "Hyland-Wexler 1983", scale: "IPTS-68")`, Gives: "4.2460 kPa"},
-			},
-			Body: saturationBody(overWater),
+var saturationLaws = []*law.Law{
+	{
+		Name: "saturation_pressure_over_water", Group: group,
+		Gives: "the pressure of water vapour in equilibrium with liquid water, supercooled below 0 degC",
+		Parameters: []law.Parameter{
+			{Name: "temperature", Meaning: "temperature of the water", Unit: "K", Valid: law.Within(123, 647.096), Finite: law.Within(123, 647.096)},
+			methodParameter(overWater, "water"), scaleParameter(),
 		},
-		{
-			Name: "saturation_pressure_over_ice", Group: group,
-			Gives: "the pressure of water vapour in equilibrium with ice",
-			Parameters: []law.Parameter{
-				{Name: "temperature", Meaning: "temperature of the ice", Unit: "K", Valid: law.Within(50, triplePoint), Finite: law.Within(50, triplePoint)},
-				methodParameter(overIce, "ice"), scaleParameter(),
-			},
-			Result: law.Result{Unit: "Pa(a)"}, Equation: iceEquation, Source: iceSource, Caution: pureCaution, Refusal: ownRange,
-			Examples: []law.Example{
-				{Formula: "saturation_pressure_over_ice(0.01[degC])", Gives: "611.657 Pa"},
-				{Formula: `saturation_pressure_over_ice(230[K], method: "IAPWS 2011")`, Gives: "8.94735 Pa"},
-			},
-			Body: saturationBody(overIce),
+		Result: law.Result{Unit: "Pa(a)"}, Equation: waterEquation, Source: waterSource, Caution: pureCaution, Refusal: ownRange,
+		Examples: []law.Example{
+			{Formula: "saturation_pressure_over_water(0.01[degC])", Gives: "611.657 Pa"},
+			{Formula: `saturation_pressure_over_water(30[degC], method: "Hyland-Wexler 1983", scale: "IPTS-68")`, Gives: "4.2460 kPa"},
 		},
-		{
-			Name: "dew_point", Group: group,
-			Gives:      "the temperature at which water vapour of a pressure begins to condense on water",
-			Parameters: []law.Parameter{partialPressure(), methodParameter(overWater, "water"), scaleParameter()},
-			Result:     law.Result{Unit: "degC"},
-			Equation:   "e_w(t_d) = e, solved for t_d; e vapour_pressure; WMO-No. 8: t_d = 243.12 degC ln(e/6.112 hPa)/(17.62 - ln(e/6.112 hPa))",
-			Source:     waterSource,
-			Caution:    "For vapour in air divide its pressure by the enhancement factor first: 0.07 K at sea level. Below 0 degC a mirror may carry frost: see frost_point.",
-			Refusal:    ownRange,
-			Examples: []law.Example{
-				{Formula: `dew_point(6.112[hPa], method: "WMO-No. 8")`, Gives: "0.000 degC"},
-				{Formula: "dew_point(611.657[Pa])", Gives: "0.0100 degC"},
-			},
-			Body: saturatedBody(overWater),
+		Body: saturationBody(overWater),
+	},
+	{
+		Name: "saturation_pressure_over_ice", Group: group,
+		Gives: "the pressure of water vapour in equilibrium with ice",
+		Parameters: []law.Parameter{
+			{Name: "temperature", Meaning: "temperature of the ice", Unit: "K", Valid: law.Within(50, triplePoint), Finite: law.Within(50, triplePoint)},
+			methodParameter(overIce, "ice"), scaleParameter(),
 		},
-		{
-			Name: "frost_point", Group: group,
-			Gives:      "the temperature at which water vapour of a pressure begins to form frost on ice",
-			Parameters: []law.Parameter{partialPressure(), methodParameter(overIce, "ice"), scaleParameter()},
-			Result:     law.Result{Unit: "degC"},
-			Equation:   "e_i(t_f) = e, solved for t_f; e vapour_pressure; WMO-No. 8: t_f = 272.62 degC ln(e/6.112 hPa)/(22.46 - ln(e/6.112 hPa))",
-			Source:     iceSource,
-			Caution:    "For vapour in air divide its pressure by the enhancement factor first. Above 611.66 Pa there is a dew point only.",
-			Refusal:    ownRange,
-			Examples: []law.Example{
-				{Formula: `frost_point(0.3798[hPa], method: "Goff-Gratch 1946")`, Gives: "-30.0 degC"},
-			},
-			Body: saturatedBody(overIce),
+		Result: law.Result{Unit: "Pa(a)"}, Equation: iceEquation, Source: iceSource, Caution: pureCaution, Refusal: ownRange,
+		Examples: []law.Example{
+			{Formula: "saturation_pressure_over_ice(0.01[degC])", Gives: "611.657 Pa"},
+			{Formula: `saturation_pressure_over_ice(230[K], method: "IAPWS 2011")`, Gives: "8.94735 Pa"},
 		},
-	}
+		Body: saturationBody(overIce),
+	},
+	{
+		Name: "dew_point", Group: group,
+		Gives:      "the temperature at which water vapour of a pressure begins to condense on water",
+		Parameters: []law.Parameter{partialPressure(), methodParameter(overWater, "water"), scaleParameter()},
+		Result:     law.Result{Unit: "degC"},
+		Equation:   "e_w(t_d) = e, solved for t_d; e vapour_pressure; WMO-No. 8: t_d = 243.12 degC ln(e/6.112 hPa)/(17.62 - ln(e/6.112 hPa))",
+		Source:     waterSource,
+		Caution:    "For vapour in air divide its pressure by the enhancement factor first: 0.07 K at sea level. Below 0 degC a mirror may carry frost: see frost_point.",
+		Refusal:    ownRange,
+		Examples: []law.Example{
+			{Formula: `dew_point(6.112[hPa], method: "WMO-No. 8")`, Gives: "0.000 degC"},
+			{Formula: "dew_point(611.657[Pa])", Gives: "0.0100 degC"},
+		},
+		Body: saturatedBody(overWater),
+	},
+	{
+		Name: "frost_point", Group: group,
+		Gives:      "the temperature at which water vapour of a pressure begins to form frost on ice",
+		Parameters: []law.Parameter{partialPressure(), methodParameter(overIce, "ice"), scaleParameter()},
+		Result:     law.Result{Unit: "degC"},
+		Equation:   "e_i(t_f) = e, solved for t_f; e vapour_pressure; WMO-No. 8: t_f = 272.62 degC ln(e/6.112 hPa)/(22.46 - ln(e/6.112 hPa))",
+		Source:     iceSource,
+		Caution:    "For vapour in air divide its pressure by the enhancement factor first. Above 611.66 Pa there is a dew point only.",
+		Refusal:    ownRange,
+		Examples: []law.Example{
+			{Formula: `frost_point(0.3798[hPa], method: "Goff-Gratch 1946")`, Gives: "-30.0 degC"},
+		},
+		Body: saturatedBody(overIce),
+	},
 }
 
 // partialPressure is the pressure of the vapour alone.
@@ -90,6 +88,8 @@ func partialPressure() law.Parameter {
 }
 
 // saturationBody takes temperature, method and scale.
+//
+//go:noinline
 func saturationBody(formulas []saturation) law.Body {
 	return func(dst []float64, arguments []law.Argument, _ *law.Work) {
 		formula, scale := formulaNamed(formulas, arguments[1].Text), arguments[2].Text
@@ -101,6 +101,8 @@ func saturationBody(formulas []saturation) law.Body {
 }
 
 // saturatedBody takes a pressure, method and scale.
+//
+//go:noinline
 func saturatedBody(formulas []saturation) law.Body {
 	return func(dst []float64, arguments []law.Argument, _ *law.Work) {
 		formula, scale := formulaNamed(formulas, arguments[1].Text), arguments[2].Text

@@ -4,6 +4,7 @@ import (
 	"math"
 
 	"plumbrule/engine/column"
+	"plumbrule/engine/law"
 )
 
 // The defining constants of the U.S. Standard Atmosphere 1976 (table 2). The
@@ -216,6 +217,53 @@ func standardDensity(altitude float64) float64 {
 		return upperAtmosphere().valueAt(upperDensity, altitude)
 	}
 	return notANumber
+}
+
+// standardBody gives a quantity for a block of rows: the layers' value below
+// 86 km, and above the table's, whose exponentials are taken together where
+// all rows are there. Each row gets the same bits either way.
+//
+//go:noinline
+func standardBody(quantity int, below func(altitude float64) float64) law.Body {
+	return func(dst []float64, arguments []law.Argument, _ *law.Work) {
+		altitudes := arguments[0].Values
+		if len(altitudes) != len(dst) {
+			value := notANumber
+			if h := altitudes[0]; inUpper(h) {
+				value = upperAtmosphere().valueAt(quantity, h)
+			} else {
+				value = below(h)
+			}
+			for i := range dst {
+				dst[i] = value
+			}
+			return
+		}
+		var table *upperTable
+		upper := 0
+		for i, h := range altitudes {
+			if !inUpper(h) {
+				dst[i] = below(h)
+				continue
+			}
+			if table == nil {
+				table = upperAtmosphere()
+			}
+			dst[i] = table.logarithmAt(quantity, h)
+			upper++
+		}
+		switch upper {
+		case 0:
+		case len(dst):
+			column.ExpColumn(dst, dst)
+		default:
+			for i, h := range altitudes {
+				if inUpper(h) {
+					dst[i] = column.Exp(dst[i])
+				}
+			}
+		}
+	}
 }
 
 // standardSoundSpeed gives the speed of sound in m/s. It goes with TM: the

@@ -48,7 +48,7 @@ var standardTemperatureLaw = &law.Law{
 		{Formula: "standard_temperature(86[km])", Gives: "186.867 K"},
 		{Formula: "standard_temperature(115[km])", Gives: "300.00 K"},
 	},
-	Body: law.Of1(standardTemperature),
+	Body: of1(standardTemperature),
 }
 
 var standardPressureLaw = &law.Law{
@@ -65,7 +65,7 @@ var standardPressureLaw = &law.Law{
 		{Formula: "standard_pressure(86[km])", Gives: "0.373384 Pa"},
 		{Formula: "standard_pressure(400[km])", Gives: "1.4518e-6 Pa"},
 	},
-	Body: law.Of1(standardPressure),
+	Body: standardBody(upperPressure, standardPressure),
 }
 
 var standardDensityLaw = &law.Law{
@@ -82,7 +82,7 @@ var standardDensityLaw = &law.Law{
 		{Formula: "standard_density(86[km])", Gives: "6.95788e-6 kg/m^3"},
 		{Formula: "standard_density(400[km])", Gives: "2.803e-12 kg/m^3"},
 	},
-	Body: law.Of1(standardDensity),
+	Body: standardBody(upperDensity, standardDensity),
 }
 
 var standardSoundSpeedLaw = &law.Law{
@@ -97,7 +97,7 @@ var standardSoundSpeedLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "standard_sound_speed(0[m])", Gives: "340.294 m/s"},
 	},
-	Body: law.Of1(standardSoundSpeed),
+	Body: of1(standardSoundSpeed),
 }
 
 var standardViscosityLaw = &law.Law{
@@ -111,7 +111,7 @@ var standardViscosityLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "standard_viscosity(0[m])", Gives: "1.78938e-5 Pa s"},
 	},
-	Body: law.Of1(standardViscosity),
+	Body: of1(standardViscosity),
 }
 
 var pressureAltitudeLaw = &law.Law{
@@ -131,7 +131,7 @@ var pressureAltitudeLaw = &law.Law{
 		{Formula: "pressure_altitude(1013.25[hPa])", Gives: "0 gpm"},
 		{Formula: "pressure_altitude(500[hPa])", Gives: "5574 gpm"},
 	},
-	Body: law.Of1(pressureAltitude),
+	Body: of1(pressureAltitude),
 }
 
 var densityAltitudeLaw = &law.Law{
@@ -150,5 +150,5 @@ var densityAltitudeLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "density_altitude(0.363918[kg/m^3])", Gives: "11000 gpm"},
 	},
-	Body: law.Of1(densityAltitude),
+	Body: of1(densityAltitude),
 }

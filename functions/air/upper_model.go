@@ -115,7 +115,7 @@ func upperTemperature(z, where float64) (temperature, gradient float64) {
 		return linearBase + float64(linearGradient*(z-ellipseTop)), linearGradient
 	}
 	stretch := (radiusKm + linearTop) / (radiusKm + z)
-	fall := column.Exp(-exosphereRate * (float64((z - linearTop) * stretch)))
+	fall := column.Exp(float64(-exosphereRate * (z - linearTop) * stretch))
 	missing := float64((exosphereTemperature - exosphereBase) * fall)
 	return exosphereTemperature - missing, exosphereRate * missing * stretch * stretch
 }
@@ -165,10 +165,10 @@ func (s *upperGas) transport(z float64) float64 {
 		return 0
 	}
 	d := z - s.u
-	v := s.q * d * d * column.Exp(-s.w*d*d*d)
+	v := float64(s.q * d * d * column.Exp(float64(-s.w*d*d*d)))
 	if s.lowerQ != 0 && z < oxygenTop {
 		d = s.lowerU - z
-		v += float64(s.lowerQ * d * d * column.Exp(-s.lowerW*d*d*d))
+		v += float64(s.lowerQ * d * d * column.Exp(float64(-s.lowerW*d*d*d)))
 	}
 	return v
 }

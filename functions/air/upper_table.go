@@ -75,8 +75,13 @@ func (t *upperTable) cellAt(altitude float64) int {
 
 // valueAt gives a quantity in coherent SI units at a geopotential height.
 func (t *upperTable) valueAt(quantity int, altitude float64) float64 {
+	return column.Exp(t.logarithmAt(quantity, altitude))
+}
+
+// logarithmAt gives the logarithm of a quantity in coherent SI units.
+func (t *upperTable) logarithmAt(quantity int, altitude float64) float64 {
 	c := &t.cells[quantity][t.cellAt(altitude)]
-	return column.Exp(c.logarithm.at(float64((altitude - c.centre) * c.scale)))
+	return c.logarithm.at(float64((altitude - c.centre) * c.scale))
 }
 
 // upperAtmosphere integrates the standard's equations when it is first asked.

@@ -89,6 +89,8 @@ func marsByFit(height float64) worldState {
 }
 
 // worldBody takes the world's name and the height.
+//
+//go:noinline
 func worldBody(give func(worldState) float64) law.Body {
 	return func(dst []float64, arguments []law.Argument, _ *law.Work) {
 		fit := arguments[0].Text == marsFit
@@ -146,7 +148,7 @@ func worldLaws() []*law.Law {
 			Examples: []law.Example{{Formula: `world_gravity("Venus", 0[km])`, Gives: "8.869 m/s^2"}},
 			Body: func(dst []float64, arguments []law.Argument, _ *law.Work) {
 				w := worldNamed(arguments[0].Text)
-				radius := w.radius * 1000
+				radius := float64(w.radius * 1000)
 				for i := range dst {
 					ratio := radius / (radius + arguments[1].At(i))
 					dst[i] = w.gravity * ratio * ratio
