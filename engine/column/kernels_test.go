@@ -142,6 +142,28 @@ func TestRanges(t *testing.T) {
 	}
 }
 
+// TestAllInsideAtItsBounds compares AllInside with one comparison a row, at
+// bounds of every sign and size.
+func TestAllInsideAtItsBounds(t *testing.T) {
+	bounds := []float64{math.Inf(-1), -math.MaxFloat64, -2.5, -1e-300, math.Copysign(0, -1), 0, 5e-324, 1, 2.5, 313.15, math.MaxFloat64, math.Inf(1)}
+	values := append([]float64{math.NaN(), -1, 0.5, 100}, bounds...)
+	for _, low := range bounds {
+		for _, high := range bounds {
+			for _, x := range values {
+				for _, n := range []int{1, 8, 11} {
+					a := make([]float64, n)
+					for i := range a {
+						a[i] = x
+					}
+					if got, want := AllInside(a, low, high), x >= low && x <= high; got != want {
+						t.Errorf("%d rows of %v from %v to %v: %v", n, x, low, high, got)
+					}
+				}
+			}
+		}
+	}
+}
+
 func TestSmallFunctions(t *testing.T) {
 	negativeZero := math.Copysign(0, -1)
 	cases := []struct {

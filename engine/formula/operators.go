@@ -210,7 +210,7 @@ func (c *checker) power(e *Expression, left, right *Node) *Node {
 // fraction gives x as a fraction with a denominator up to 12.
 func fraction(x float64) (numerator, denominator int, ok bool) {
 	for denominator = 1; denominator <= 12; denominator++ {
-		scaled := x * float64(denominator)
+		scaled := float64(x * float64(denominator))
 		nearest := float64(int(scaled + 0.5))
 		if scaled < 0 {
 			nearest = float64(int(scaled - 0.5))

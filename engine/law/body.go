@@ -58,6 +58,8 @@ func (a *Argument) stride() int {
 }
 
 // Of1 lifts a function of the first argument to blocks of rows.
+//
+//go:noinline
 func Of1(f func(a float64) float64) Body {
 	return func(dst []float64, arguments []Argument, _ *Work) {
 		a, ia := arguments[0].Values, arguments[0].stride()
@@ -68,6 +70,8 @@ func Of1(f func(a float64) float64) Body {
 }
 
 // Of2 lifts a function of the first two arguments to blocks of rows.
+//
+//go:noinline
 func Of2(f func(a, b float64) float64) Body {
 	return func(dst []float64, arguments []Argument, _ *Work) {
 		a, ia := arguments[0].Values, arguments[0].stride()
@@ -79,6 +83,8 @@ func Of2(f func(a, b float64) float64) Body {
 }
 
 // Of3 lifts a function of the first three arguments to blocks of rows.
+//
+//go:noinline
 func Of3(f func(a, b, c float64) float64) Body {
 	return func(dst []float64, arguments []Argument, _ *Work) {
 		a, ia := arguments[0].Values, arguments[0].stride()
@@ -91,6 +97,8 @@ func Of3(f func(a, b, c float64) float64) Body {
 }
 
 // Of4 lifts a function of the first four arguments to blocks of rows.
+//
+//go:noinline
 func Of4(f func(a, b, c, d float64) float64) Body {
 	return func(dst []float64, arguments []Argument, _ *Work) {
 		a, ia := arguments[0].Values, arguments[0].stride()
@@ -105,6 +113,8 @@ func Of4(f func(a, b, c, d float64) float64) Body {
 
 // OfMany lifts a function of any number of number arguments to blocks of rows.
 // The slice that f gets is used again for the next row.
+//
+//go:noinline
 func OfMany(f func(x []float64) float64) Body {
 	return func(dst []float64, arguments []Argument, work *Work) {
 		x, _ := work.Keep.([]float64)

@@ -1,6 +1,7 @@
 package plan
 
 import (
+	"plumbrule/engine/column"
 	"plumbrule/engine/formula"
 )
 
@@ -245,14 +246,30 @@ func (c *quickPlanner) findChecks() {
 			continue
 		}
 		for _, u := range c.users[i] {
-			if c.p.slots[u].op == formula.Exp && c.sameHome(i, u) {
-				c.found[i] = true // the step of exp says so
+			if c.sameHome(i, u) && c.looksAt(u, i) {
+				c.found[i] = true
 			}
 			if c.sameHome(i, u) && c.propagates(u, i) && (c.found[u] || c.mustCheck(u)) {
 				c.found[i] = true
 			}
 		}
 	}
+}
+
+// looksAt says whether a step itself finds an operand that is not finite: that
+// of exp tells, and a law whose range is bounded on both sides.
+func (c *quickPlanner) looksAt(u, operand int) bool {
+	slot := &c.p.slots[u]
+	if slot.op == formula.Exp {
+		return true
+	}
+	for k := range slot.checks {
+		check := &slot.checks[k]
+		if c.q.root[check.slot] == operand && column.Finite(check.low) && column.Finite(check.high) {
+			return true
+		}
+	}
+	return false
 }
 
 // mustCheck says whether a step's result may be infinite or no number though
