@@ -59,7 +59,7 @@ func doMain(args []string, stdout, stderr io.Writer) int {
 	b := &bench{module: module, path: *path, rows: *count, repeat: *repeat}
 	fmt.Fprintf(stdout, "%s, %s/%s, %d processors, %d rows, median of %d pairs\n\n", runtime.Version(), runtime.GOOS, runtime.GOARCH, runtime.GOMAXPROCS(0), b.rows, b.repeat)
 	fmt.Fprintf(stdout, "%-62s %9s %9s %7s %6s %6s\n", "subject / compared with", "ns/row", "ns/row", "ratio", "bar", "aim")
-	for _, make := range []func(*bench) ([]line, error){densityLines, lawLines, sheetLines, coreLines} {
+	for _, make := range []func(*bench) ([]line, error){densityLines, lawLines, moreLawLines, sheetLines, coreLines} {
 		lines, err := make(b)
 		if err != nil {
 			fmt.Fprintln(stderr, "bench:", err)
