@@ -5,6 +5,7 @@ import (
 	"errors"
 	"fmt"
 	"io"
+	"math"
 	"os"
 	"strconv"
 	"strings"
@@ -29,6 +30,16 @@ type row struct {
 var columns = []string{"id", "formula", "expected", "unit", "half_unit", "source", "provenance", "why"}
 
 var provenances = map[string]bool{"published": true, "memory": true, "computed": true, "common practice": true}
+
+// halfOfLastDigit gives half a unit of the last digit of a printed number.
+func halfOfLastDigit(printed string) float64 {
+	digits, exponent, _ := strings.Cut(strings.ToLower(printed), "e")
+	power, _ := strconv.Atoi(strings.TrimPrefix(exponent, "+"))
+	if _, behind, ok := strings.Cut(digits, "."); ok {
+		power -= len(behind)
+	}
+	return 0.5 * math.Pow(10, float64(power))
+}
 
 // readTable reads a conformance table. A column that is missing or unknown, a
 // row without a source or with a tolerance that is no number is an error.
@@ -69,6 +80,9 @@ func readTable(path string) ([]*row, error) {
 		r.halfUnit, err = strconv.ParseFloat(record[4], 64)
 		if err != nil || r.halfUnit <= 0 {
 			return nil, fmt.Errorf("%s:%d: half_unit is not a positive number", path, line)
+		}
+		if r.why == "" && record[6] != "common practice" && r.halfUnit > halfOfLastDigit(record[2])*(1+1e-9) {
+			return nil, fmt.Errorf("%s:%d: %s: half_unit is wider than half a unit of the last printed digit: why", path, line, r.id)
 		}
 		if seen[r.id] || r.id == "" {
 			return nil, fmt.Errorf("%s:%d: the id %q is missing or stands twice", path, line, r.id)

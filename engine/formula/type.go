@@ -189,6 +189,8 @@ func Showable(value, shown unit.Kind) (unit.Kind, string, string) {
 	switch {
 	case value == unit.Geopotential:
 		return value, "a geopotential height is not a geometric one", "write the unit gpm, or convert with geometric_height(h)"
+	case shown == unit.Angle:
+		return shown, "a pure number is not an angle", "give it its unit, as in (x)[rad] or 45[deg]"
 	case shown == unit.Geopotential:
 		return shown, "a geometric height is not a geopotential one", "write the unit m, or convert with geopotential_height(h)"
 	case value == unit.TemperatureDifference:

@@ -41,6 +41,16 @@ func (p *Program) Run(ctx context.Context, in rows.Input, out *rows.Outcome, wor
 		return ctx.Err()
 	}
 	w := p.takeWorker(s)
+	if len(s.each) == 0 && len(s.inputs) == 0 && w.quickSingles(in) {
+		for e, slot := range p.outputs {
+			values, x := out.Values[e], w.single[slot]
+			for i := range values {
+				values[i] = x
+			}
+		}
+		s.keep(w)
+		return nil
+	}
 	r := &w.alone
 	r.p, r.in, r.out = p, in, out
 	w.begin(in)
@@ -71,6 +81,13 @@ func (r *run) share(ctx context.Context, s *schedule, blocks, workers int) {
 		})
 	}
 	group.Wait()
+}
+
+// keep puts a worker by that holds nothing of the caller's.
+func (s *schedule) keep(w *worker) {
+	if !s.idle.CompareAndSwap(nil, w) {
+		s.workers.Put(w)
+	}
 }
 
 // takeWorker gives a worker that an earlier run has left, or a new one.
@@ -108,9 +125,7 @@ func (r *run) end(w *worker) {
 // rest puts a worker by for later runs.
 func (w *worker) rest() {
 	w.forget()
-	if !w.s.idle.CompareAndSwap(nil, w) {
-		w.s.workers.Put(w)
-	}
+	w.s.keep(w)
 }
 
 // minBlocks is how many blocks a worker must have before another one pays.

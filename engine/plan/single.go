@@ -45,6 +45,17 @@ func (w *worker) quickSingles(in rows.Input) bool {
 	for _, i := range w.s.once {
 		s := &w.p.slots[i]
 		switch s.op {
+		case formula.Add:
+			w.single[i] = w.single[s.args[0]] + w.single[s.args[1]]
+			continue
+		case formula.Sub:
+			w.single[i] = w.single[s.args[0]] - w.single[s.args[1]]
+			continue
+		case formula.Mul:
+			w.single[i] = float64(w.single[s.args[0]] * w.single[s.args[1]])
+			continue
+		case formula.Div:
+			w.single[i] = w.single[s.args[0]] / w.single[s.args[1]]
 		case formula.Apply:
 			if !w.singleLaw(i, s) {
 				return false
@@ -100,14 +111,6 @@ func (w *worker) singleLaw(i int, s *slot) bool {
 func (w *worker) computeSingle(s *slot) float64 {
 	a := w.single[s.args[0]]
 	switch s.op {
-	case formula.Add:
-		return a + w.single[s.args[1]]
-	case formula.Sub:
-		return a - w.single[s.args[1]]
-	case formula.Mul:
-		return float64(a * w.single[s.args[1]])
-	case formula.Div:
-		return a / w.single[s.args[1]]
 	case formula.Neg:
 		return -a
 	case formula.Exp:

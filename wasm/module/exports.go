@@ -80,4 +80,4 @@ func exportTallies(program int32) (doc uint64) {
 func exportFault() uint64 { return module.document(abi.AppendFault(module.doc[:0], module.fault)) }
 
 //go:wasmexport plumbrule_close
-func exportClose(program int32) { delete(module.programs, program) }
+func exportClose(program int32) { module.close(program) }

@@ -19,6 +19,7 @@ type instance struct {
 	programs map[int32]*open
 	next     int32
 	recent   [2]recent
+	latest   *open // the program of the last run
 	doc      []byte // the last document; valid until the next call
 	fault    string
 }
@@ -30,7 +31,10 @@ type recent struct {
 
 // open is a compiled program with what its runs use again.
 type open struct {
+	number  int32
 	program *engine.Program
+	knowns  int
+	entries int
 	in      rows.Input
 	out     rows.Outcome
 }
@@ -98,6 +102,11 @@ func (m *instance) reserve(size int32) uint32 {
 	return place
 }
 
+func (m *instance) close(number int32) {
+	delete(m.programs, number)
+	m.latest = nil
+}
+
 func (m *instance) release(place uint32) {
 	delete(m.buffers, place)
 	m.recent = [2]recent{}
@@ -121,7 +130,8 @@ func (m *instance) compile(text, choices []byte) uint64 {
 		return m.document(compiled.Append(m.doc[:0]))
 	}
 	m.next++
-	m.programs[m.next] = &open{program: program.(*engine.Program)}
+	described := program.Describe()
+	m.programs[m.next] = &open{number: m.next, program: program.(*engine.Program), knowns: len(described.Knowns), entries: len(described.Entries)}
 	compiled.Program = int(m.next)
 	compiled.Description = *program.Describe()
 	return m.document(compiled.Append(m.doc[:0]))
@@ -142,10 +152,13 @@ func readChoices(text string) map[string][]string {
 }
 
 func (m *instance) run(number, count int32, in, out uint32) abi.Code {
-	p := m.programs[number]
-	if p == nil {
-		m.fault = "this program is not open"
-		return abi.NoSuch
+	p := m.latest
+	if p == nil || p.number != number {
+		if p = m.programs[number]; p == nil {
+			m.fault = "this program is not open"
+			return abi.NoSuch
+		}
+		m.latest = p
 	}
 	if count < 0 || count > abi.MostRows {
 		m.fault = "a run has 0 to 1048576 rows"
@@ -165,7 +178,7 @@ func (m *instance) run(number, count int32, in, out uint32) abi.Code {
 
 // readInput lets the program's input point into the host's buffer.
 func (m *instance) readInput(p *open, n int, in uint32) bool {
-	knowns := len(p.program.Describe().Knowns)
+	knowns := p.knowns
 	shape := m.bytesAt(in, knowns)
 	if shape == nil {
 		m.fault = "the input is not a reserved buffer"
@@ -201,13 +214,15 @@ func (m *instance) readInput(p *open, n int, in uint32) bool {
 
 // placeOutput lets the program's results be written into the host's buffer.
 func (m *instance) placeOutput(p *open, n int, out uint32) bool {
-	entries := len(p.program.Describe().Entries)
+	entries := p.entries
 	layout := abi.OutputLayout(entries, n)
 	if m.bytesAt(out, layout.Size) == nil {
 		m.fault = "the output buffer is too small"
 		return false
 	}
-	p.out.Resize(entries, 0)
+	if len(p.out.Values) != entries {
+		p.out.Resize(entries, 0)
+	}
 	if layout.Size == 0 {
 		return true
 	}
