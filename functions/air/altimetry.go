@@ -69,7 +69,7 @@ var altimetryLaws = []*law.Law{
 		Source:   "WMO-No. 8, Guide to Meteorological Instruments and Methods of Observation, annex 3.A (stations below about 750 m)",
 		Caution:  "A fiction: there is no air below the station. K_p belongs to the older geopotential metre of 9.8 J/kg: 0.06 % less than with 9.80665. " + aviationCaution,
 		Examples: []law.Example{{Formula: "sea_level_pressure(1000[hPa], 0[gpm], 288.15[K])", Gives: "1000 hPa"}},
-		Body: of4(func(p, h, t, e float64) float64 {
+		Body: law.Of4(func(p, h, t, e float64) float64 {
 			mean := t + float64(0.0065/2*h) + float64(0.0012*e)
 			return p * power10(0.0148275*h/mean)
 		}),

@@ -32,7 +32,7 @@ var columnHeightLaws = []*law.Law{
 		Result:     law.Result{Unit: "m"},
 		Equation:   "h = (R T/(M g)) ln(p0/p)", Source: barometricSource, Caution: columnCaution,
 		Examples: []law.Example{{Formula: "barometric_height(1000[hPa], 1000[hPa], 250[K], 28.9644[g/mol])", Gives: "0 m"}},
-		Body: ofMany(func(x []float64) float64 {
+		Body: law.OfMany(func(x []float64) float64 {
 			return barometricHeight(x[0], x[1], x[2], x[3], x[4])
 		}),
 	},
@@ -42,7 +42,7 @@ var columnHeightLaws = []*law.Law{
 		Result:     law.Result{Unit: "m"},
 		Equation:   "h = (T0/L) (1 - (p/p0)^(R L/(g M))); for L = 0, h = (R T0/(M g)) ln(p0/p)", Source: lapsedSource, Caution: columnCaution,
 		Examples: []law.Example{{Formula: "lapsed_height(101325[Pa], 22632.06[Pa], 288.15[K], 6.5[K/km], 28.9644[g/mol]*nature.R/8.31432[J/(mol K)])", Gives: "11000.00 m"}},
-		Body: ofMany(func(x []float64) float64 {
+		Body: law.OfMany(func(x []float64) float64 {
 			return lapsedHeight(x[0], x[1], x[2], x[3], x[4], x[5])
 		}),
 	},
@@ -58,7 +58,7 @@ var columnHeightLaws = []*law.Law{
 		Equation: "n = n0 exp(-m g h/(k_B T)); n0 base, m particle_mass", Caution: columnCaution, Refusal: columnOverflow,
 		Source:   "Boltzmann L. (1879) Sitzungsber. Akad. Wiss. Wien 78, 7; Perrin J. (1909) Mouvement brownien et réalité moléculaire, Ann. Chim. Phys. 18, 5",
 		Examples: []law.Example{{Formula: "barometric_number_density(1e25[m^-3], 0[m], 4.65e-26[kg], 250[K])", Gives: "1e25 m^-3"}},
-		Body: ofMany(func(x []float64) float64 {
+		Body: law.OfMany(func(x []float64) float64 {
 			return x[0] * isothermal(x[1], x[3], x[2]*nature.AvogadroConstant, x[4])
 		}),
 	},
@@ -74,7 +74,7 @@ var columnHeightLaws = []*law.Law{
 		Equation: "Z2 - Z1 = (R T_v/g0) ln(p1/p2), g0 = 9.80665 m/s^2; R gas_constant", Source: "WMO-No. 8, Guide to Meteorological Instruments and Methods of Observation; Wallace J.M., Hobbs P.V. (2006) Atmospheric Science, 2nd ed., equation 3.29",
 		Caution:  "Hydrostatic: not inside a thunderstorm.",
 		Examples: []law.Example{{Formula: "layer_thickness(1000[hPa], 500[hPa], 288.15[K])", Gives: "5846 gpm"}},
-		Body: of4(func(lower, upper, t, r float64) float64 {
+		Body: law.Of4(func(lower, upper, t, r float64) float64 {
 			return r * t / standardGravity * column.Ln(lower/upper)
 		}),
 	},
@@ -88,7 +88,7 @@ var columnHeightLaws = []*law.Law{
 		Result:   law.Result{Unit: "K"},
 		Equation: "T_v = T (1 + r/epsilon)/(1 + r), about T (1 + 0.61 r); r mixing_ratio, epsilon mass_ratio", Source: "Wallace J.M., Hobbs P.V. (2006) Atmospheric Science, 2nd ed., equations 3.16 and 3.59",
 		Examples: []law.Example{{Formula: "virtual_temperature(300[K], 0)", Gives: "300 K"}},
-		Body:     of3(func(t, r, epsilon float64) float64 { return t * ((1 + r/epsilon) / (1 + r)) }),
+		Body:     law.Of3(func(t, r, epsilon float64) float64 { return t * ((1 + r/epsilon) / (1 + r)) }),
 	},
 }
 

@@ -125,7 +125,7 @@ var scaleHeightLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "scale_height(288.15[K], 28.9644[g/mol])", Gives: "8434.66 m"},
 	},
-	Body: of3(scaleHeight),
+	Body: law.Of3(scaleHeight),
 }
 
 var barometricPressureLaw = &law.Law{
@@ -145,7 +145,7 @@ var barometricPressureLaw = &law.Law{
 		{Formula: "barometric_pressure(1000[hPa], 0[m], 250[K], 28.9644[g/mol])", Gives: "100000 Pa"},
 		{Formula: "barometric_pressure(22632.06[Pa], 1000[gpm], 216.65[K], 28.9644[g/mol])", Gives: "19330.45 Pa"},
 	},
-	Body: ofMany(func(x []float64) float64 {
+	Body: law.OfMany(func(x []float64) float64 {
 		return x[0] * isothermal(x[1], x[2], x[3], x[4])
 	}),
 }
@@ -166,7 +166,7 @@ var barometricDensityLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "barometric_density(1.2[kg/m^3], 0[m], 250[K], 28.9644[g/mol])", Gives: "1.2 kg/m^3"},
 	},
-	Body: ofMany(func(x []float64) float64 {
+	Body: law.OfMany(func(x []float64) float64 {
 		return x[0] * isothermal(x[1], x[2], x[3], x[4])
 	}),
 }
@@ -187,7 +187,7 @@ var lapsedPressureLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "lapsed_pressure(101325[Pa], 11000[gpm], 288.15[K], 6.5[K/km], 28.9644[g/mol]*nature.R/8.31432[J/(mol K)])", Gives: "22632.06 Pa"},
 	},
-	Body: ofMany(func(x []float64) float64 {
+	Body: law.OfMany(func(x []float64) float64 {
 		pressure, _ := lapsed(x[1], x[2], x[3], x[4], x[5])
 		return x[0] * pressure
 	}),
@@ -209,7 +209,7 @@ var lapsedDensityLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "lapsed_density(1.225[kg/m^3], 11000[gpm], 288.15[K], 6.5[K/km], 28.9644[g/mol]*nature.R/8.31432[J/(mol K)])", Gives: "0.363918 kg/m^3"},
 	},
-	Body: ofMany(func(x []float64) float64 {
+	Body: law.OfMany(func(x []float64) float64 {
 		_, density := lapsed(x[1], x[2], x[3], x[4], x[5])
 		return x[0] * density
 	}),

@@ -20,14 +20,14 @@ var escapeLaws = []*law.Law{
 		Result: law.Result{Unit: "m/s"}, Equation: "v = sqrt(2 G M/r)", Source: "conservation of energy; Laplace P.S. (1796) Exposition du système du monde",
 		Caution:  "Without air, rotation and other bodies.",
 		Examples: []law.Example{{Formula: "escape_speed(3.986e14[m^3/s^2], 6371[km])", Gives: "11.19 km/s"}},
-		Body:     of2(func(gm, r float64) float64 { return math.Sqrt(2 * gm / r) }),
+		Body:     law.Of2(func(gm, r float64) float64 { return math.Sqrt(2 * gm / r) }),
 	},
 	{
 		Name: "escape_parameter", Group: group, Gives: "a particle's energy of escape over k_B T (Jeans)",
 		Parameters: []law.Parameter{escapeGM, escapeRadius, escapeExobase, molarMassOfParticles()},
 		Result:     law.Result{Unit: "1"}, Equation: "lambda = G M m/(k_B T r), m = M_mol/N_A; M_mol molar_mass", Source: escapeJeans, Caution: escapeCaution,
 		Examples: []law.Example{{Formula: "escape_parameter(3.986e14[m^3/s^2], 6871[km], 900[K], 1.008[g/mol])", Gives: "8"}},
-		Body:     of4(escapeParameter),
+		Body:     law.Of4(escapeParameter),
 	},
 	{
 		Name: "escape_flux", Group: group, Gives: "how many particles escape through an area of the exobase in a time (Jeans)",
@@ -38,7 +38,7 @@ var escapeLaws = []*law.Law{
 		Result:   law.Result{Unit: "m^-2 s^-1"},
 		Equation: "phi = n v_p (1 + lambda) exp(-lambda)/(2 sqrt(pi)), v_p = sqrt(2 R T/M_mol), lambda = G M m/(k_B T r)", Source: escapeJeans, Caution: escapeCaution,
 		Examples: []law.Example{{Formula: "escape_flux(0[m^-3], 3.986e14[m^3/s^2], 6871[km], 1000[K], 1.008[g/mol])", Gives: "0 m^-2 s^-1"}},
-		Body: ofMany(func(x []float64) float64 {
+		Body: law.OfMany(func(x []float64) float64 {
 			lambda := escapeParameter(x[1], x[2], x[3], x[4])
 			return x[0] * (math.Sqrt2 * speedScale(x[3], x[4])) * (1 + lambda) * column.Exp(-lambda) * (twoOverRootPi / 4)
 		}),

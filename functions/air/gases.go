@@ -15,21 +15,21 @@ var gasLaws = []*law.Law{
 		Parameters: []law.Parameter{pressureOrNone(), temperatureOfGas(), meanMolarMass(), gasCompressibility},
 		Result:     law.Result{Unit: "kg/m^3"}, Equation: "rho = p M/(Z R T); p pressure, Z compressibility", Source: gasSource, Caution: gasIdeal,
 		Examples: []law.Example{{Formula: "gas_density(92.10[bar], 735.3[K], 43.44[g/mol], compressibility: 1.0100)", Gives: "64.8 kg/m^3"}},
-		Body:     of4(func(p, t, m, z float64) float64 { return p * m / (z * nature.MolarGasConstant * t) }),
+		Body:     law.Of4(func(p, t, m, z float64) float64 { return p * m / (z * nature.MolarGasConstant * t) }),
 	},
 	{
 		Name: "gas_number_density", Group: group, Gives: "the number of particles of a gas in a volume",
 		Parameters: []law.Parameter{pressureOrNone(), temperatureOfGas()},
 		Result:     law.Result{Unit: "m^-3"}, Equation: "n = p/(k_B T); p pressure", Source: gasSource, Caution: gasIdeal,
 		Examples: []law.Example{{Formula: "gas_number_density(101325[Pa], 273.15[K])", Gives: "2.6867801e25 m^-3"}},
-		Body:     of2(func(p, t float64) float64 { return p / (nature.BoltzmannConstant * t) }),
+		Body:     law.Of2(func(p, t float64) float64 { return p / (nature.BoltzmannConstant * t) }),
 	},
 	{
 		Name: "molar_volume", Group: group, Gives: "the volume of one mole of a gas",
 		Parameters: []law.Parameter{pressureOfGas(), temperatureOfGas()},
 		Result:     law.Result{Unit: "m^3/mol"}, Equation: "V_m = R T/p; p pressure", Source: gasSource, Caution: gasIdeal,
 		Examples: []law.Example{{Formula: "molar_volume(101325[Pa], 273.15[K])", Gives: "22.413970e-3 m^3/mol"}},
-		Body:     of2(func(p, t float64) float64 { return nature.MolarGasConstant * t / p }),
+		Body:     law.Of2(func(p, t float64) float64 { return nature.MolarGasConstant * t / p }),
 	},
 	{
 		Name: "column_amount", Group: group, Gives: "the amount of gas in the whole column above an area",
@@ -41,7 +41,7 @@ var gasLaws = []*law.Law{
 		Source:   "hydrostatic equation; Wallace J.M., Hobbs P.V. (2006) Atmospheric Science, 2nd ed., section 3.2",
 		Caution:  "One gravity over the whole height: true amounts are 0.3 % larger on Earth.",
 		Examples: []law.Example{{Formula: "column_amount(9.80665[Pa], 1[kg/mol])", Gives: "1 mol/m^2"}},
-		Body:     of3(func(p, m, g float64) float64 { return p / (m * g) }),
+		Body:     law.Of3(func(p, m, g float64) float64 { return p / (m * g) }),
 	},
 	mixtureLaw,
 }
@@ -217,7 +217,7 @@ func transportLaws() []*law.Law {
 			Equation:   "k_t = 2.64638e-3 T^1.5/(T + 245.4 10^(-12/T)), T in K", Source: standardSource + ", equation 53",
 			Caution:  "Agrees with handbooks within 1 % from 200 to 500 K. Dry air in bulk: where the mean free path is no longer small against the gap, less heat passes.",
 			Examples: []law.Example{{Formula: "air_conductivity(288.15[K])", Gives: "2.5326e-2 W/(m K)"}},
-			Body:     of1(func(t float64) float64 { return conductivityOfAir(t, standardConductivityCoefficient) }),
+			Body:     law.Of1(func(t float64) float64 { return conductivityOfAir(t, standardConductivityCoefficient) }),
 		},
 	}
 }

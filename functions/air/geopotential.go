@@ -57,7 +57,7 @@ var geopotentialHeightLaw = &law.Law{
 		{Formula: "geopotential_height(86[km])", Gives: "84852.05 gpm"},
 		{Formula: "geopotential_height(11019[m])", Gives: "10999.93 gpm"},
 	},
-	Body: of1(geopotentialHeight),
+	Body: law.Of1(geopotentialHeight),
 }
 
 var geometricHeightLaw = &law.Law{
@@ -75,5 +75,5 @@ var geometricHeightLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "geometric_height(11000[gpm])", Gives: "11019.07 m"},
 	},
-	Body: of1(geometricHeight),
+	Body: law.Of1(geometricHeight),
 }

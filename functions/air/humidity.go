@@ -58,7 +58,7 @@ var humidityLaws = []*law.Law{
 		Equation:   "r = epsilon e/(p - e); epsilon mass_ratio, e vapour_pressure, p pressure",
 		Source:     humidWMO, Refusal: humidNoRoom,
 		Examples: []law.Example{{Formula: "mixing_ratio(0[Pa], 1000[hPa])", Gives: "0"}, {Formula: "mixing_ratio(500[hPa], 1000[hPa])", Gives: "0.62198"}},
-		Body: of3(func(e, p, epsilon float64) float64 {
+		Body: law.Of3(func(e, p, epsilon float64) float64 {
 			if !(e < p) {
 				return notANumber
 			}
@@ -73,7 +73,7 @@ var humidityLaws = []*law.Law{
 		Equation:   "q = epsilon e/(p - (1 - epsilon) e); epsilon mass_ratio, e vapour_pressure, p pressure",
 		Source:     humidWMO, Refusal: humidNoRoom,
 		Examples: []law.Example{{Formula: "specific_humidity(1000[hPa], 1000[hPa])", Gives: "1"}},
-		Body: of3(func(e, p, epsilon float64) float64 {
+		Body: law.Of3(func(e, p, epsilon float64) float64 {
 			if !(e <= p) {
 				return notANumber
 			}
@@ -89,7 +89,7 @@ var humidityLaws = []*law.Law{
 		Source:     humidWMO + "; M_v as in Picard A. et al. (2008) Metrologia 45, 149 (CIPM-2007)",
 		Caution:    "Vapour as an ideal gas: 0.1 % at room temperature, more near saturation above 50 degC.",
 		Examples:   []law.Example{{Formula: "absolute_humidity(1000[Pa], 293.15[K])", Gives: "7.3912e-3 kg/m^3"}},
-		Body:       of2(func(e, t float64) float64 { return e * waterMolarMass / (nature.MolarGasConstant * t) }),
+		Body:       law.Of2(func(e, t float64) float64 { return e * waterMolarMass / (nature.MolarGasConstant * t) }),
 	},
 }
 

@@ -31,7 +31,7 @@ var icao = atmosphere{layers: standardLayers(icaoGasConstant)}
 //
 //go:noinline
 func ofICAO(f func(l *layer, altitude float64) float64) law.Body {
-	return of1(func(altitude float64) float64 {
+	return law.Of1(func(altitude float64) float64 {
 		if !(altitude >= lowestGeopotential && altitude <= icaoTop) {
 			return notANumber
 		}

@@ -89,7 +89,7 @@ var kineticLaws = []*law.Law{
 		Result:     law.Result{Unit: "1"},
 		Equation:   "erfc(s) + (2/sqrt(pi)) s exp(-s^2), s = speed/sqrt(2 R T/M)", Source: maxwellSource, Caution: maxwellOnly,
 		Examples: []law.Example{{Formula: "fraction_faster(most_probable_speed(300[K], 28[g/mol]), 300[K], 28[g/mol])", Gives: "0.5724"}},
-		Body: of3(func(v, t, m float64) float64 {
+		Body: law.Of3(func(v, t, m float64) float64 {
 			return fasterThan(v / (math.Sqrt2 * speedScale(t, m)))
 		}),
 	},
@@ -100,7 +100,7 @@ var kineticLaws = []*law.Law{
 		Equation:   "F(lower) - F(upper), F(v) = erfc(s) + (2/sqrt(pi)) s exp(-s^2), s = v/sqrt(2 R T/M)", Source: maxwellSource, Caution: maxwellOnly,
 		Refusal:  "the upper limit lies below the lower one",
 		Examples: []law.Example{{Formula: "fraction_between(0[m/s], most_probable_speed(300[K], 28[g/mol]), 300[K], 28[g/mol])", Gives: "0.4276"}},
-		Body: of4(func(a, b, t, m float64) float64 {
+		Body: law.Of4(func(a, b, t, m float64) float64 {
 			scale := math.Sqrt2 * speedScale(t, m)
 			return fractionBetween(a/scale, b/scale)
 		}),
@@ -112,7 +112,7 @@ var kineticLaws = []*law.Law{
 		Equation:   "l = k_B T/(sqrt(2) pi d^2 p); d diameter, p pressure", Source: maxwellSource,
 		Caution:  "Hard spheres of one kind. The diameter that fits viscosity shrinks as it grows hotter; handbook values of l differ by 10 %.",
 		Examples: []law.Example{{Formula: "mean_free_path(1.0[atm], 300[K], 290[pm])", Gives: "1.1e-7 m"}},
-		Body:     of3(hardSpherePath),
+		Body:     law.Of3(hardSpherePath),
 	},
 	{
 		Name: "collision_rate", Group: group, Gives: "how often a particle of a gas meets another",
@@ -121,7 +121,7 @@ var kineticLaws = []*law.Law{
 		Equation:   "z = v/l, v = sqrt(8 R T/(pi M)), l = k_B T/(sqrt(2) pi d^2 p); d diameter, p pressure", Source: maxwellSource,
 		Caution:  "Hard spheres of one kind.",
 		Examples: []law.Example{{Formula: "collision_rate(101325[Pa], 288.15[K], 0.365[nm], 28.9644[g/mol])", Gives: "6.919e9 s^-1"}},
-		Body: of4(func(p, t, d, m float64) float64 {
+		Body: law.Of4(func(p, t, d, m float64) float64 {
 			return math.Sqrt(8/math.Pi) * speedScale(t, m) / hardSpherePath(p, t, d)
 		}),
 	},
@@ -132,7 +132,7 @@ var kineticLaws = []*law.Law{
 		Equation:   "Z = p/sqrt(2 pi m k_B T), m = M/N_A; p pressure", Source: "Hertz H. (1882) Ann. Phys. 253, 177; Knudsen M. (1909) Ann. Phys. 333, 75",
 		Caution:  maxwellOnly,
 		Examples: []law.Example{{Formula: "impingement_rate(1[Pa], 300[K], 28.0134[g/mol])", Gives: "2.87e22 m^-2 s^-1"}},
-		Body:     of3(impingement),
+		Body:     law.Of3(impingement),
 	},
 	{
 		Name: "effusion_rate", Group: group, Gives: "how many particles of a gas leave through a small hole into vacuum in a time",
@@ -144,7 +144,7 @@ var kineticLaws = []*law.Law{
 		Equation: "dN/dt = p A/sqrt(2 pi m k_B T), m = M/N_A; p pressure, A area", Source: "Knudsen M. (1909) Ann. Phys. 333, 75",
 		Caution:  "The hole must be small against the mean free path, the wall thin against the hole. " + law.CautionVacuum,
 		Examples: []law.Example{{Formula: "effusion_rate(1[Pa], 300[K], 28.0134[g/mol], 1[mm^2])", Gives: "2.87e16 s^-1"}},
-		Body:     of4(func(p, t, m, area float64) float64 { return area * impingement(p, t, m) }),
+		Body:     law.Of4(func(p, t, m, area float64) float64 { return area * impingement(p, t, m) }),
 	},
 }
 
@@ -154,7 +154,7 @@ func kineticSpeed(name, gives, equation string, factor float64, example law.Exam
 		Parameters: []law.Parameter{temperatureOfGas(), molarMassOfParticles()},
 		Result:     law.Result{Unit: "m/s"}, Equation: equation, Source: maxwellSource, Caution: maxwellOnly,
 		Examples: []law.Example{example},
-		Body:     of2(func(t, m float64) float64 { return factor * speedScale(t, m) }),
+		Body:     law.Of2(func(t, m float64) float64 { return factor * speedScale(t, m) }),
 	}
 }
 func kineticLimit(name, meaning string) law.Parameter {

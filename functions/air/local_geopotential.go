@@ -34,7 +34,7 @@ var localGeopotentialLaws = []*law.Law{
 		},
 		Result: law.Result{Unit: "gpm"}, Equation: "H = (gamma/9.80665 m/s^2) R z/(R + z); " + localSymbols, Source: localSource, Caution: localCaution,
 		Examples: []law.Example{{Formula: "local_geopotential_height(0[m], 45[deg])", Gives: "0 gpm"}},
-		Body: of2(func(z, latitude float64) float64 {
+		Body: law.Of2(func(z, latitude float64) float64 {
 			gravity, radius := localGeopotential(latitude)
 			return gravity / standardGravity * (z * (radius / (radius + z)))
 		}),
@@ -46,7 +46,7 @@ var localGeopotentialLaws = []*law.Law{
 		},
 		Result: law.Result{Unit: "m"}, Equation: "z = R H/(gamma R/9.80665 m/s^2 - H); " + localSymbols, Source: localSource, Caution: localCaution,
 		Examples: []law.Example{{Formula: "local_geometric_height(0[gpm], 45[deg])", Gives: "0 m"}},
-		Body: of2(func(h, latitude float64) float64 {
+		Body: law.Of2(func(h, latitude float64) float64 {
 			gravity, radius := localGeopotential(latitude)
 			own := float64(h * (standardGravity / gravity))
 			return own * (radius / (radius - own))

@@ -188,7 +188,7 @@ var psychrometerLaws = []*law.Law{
 		Caution:  "A psychrometer's wet bulb comes within some tenths of a kelvin of it only where it is well aspirated.",
 		Refusal:  "the wet bulb is warmer than the dry one, boils at that pressure, or is so much colder that no vapour is left",
 		Examples: []law.Example{{Formula: "mixing_ratio_from_wet_bulb(40[degC], 20[degC], 101.325[kPa])", Gives: "6.4e-3"}},
-		Body: of3(func(dry, wet, pressure float64) float64 {
+		Body: law.Of3(func(dry, wet, pressure float64) float64 {
 			e := column.Exp(formulaNamed(overWater, "Hyland-Wexler 1983").lnPressure(wet, scaleIPTS68))
 			t, ts := dry-celsiusOrigin, wet-celsiusOrigin
 			saturated := waterToAir * e / (pressure - e)

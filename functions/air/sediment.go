@@ -25,14 +25,14 @@ var sedimentLaws = []*law.Law{
 		},
 		Result: law.Result{Unit: "kg"}, Equation: "m = (4/3) pi a^3 (Delta - delta); a radius", Source: sedimentPerrin,
 		Examples: []law.Example{{Formula: "buoyant_mass(0[um], 63[kg/m^3])", Gives: "0 kg"}},
-		Body:     of2(func(a, d float64) float64 { return 4.0 / 3 * math.Pi * a * a * a * d }),
+		Body:     law.Of2(func(a, d float64) float64 { return 4.0 / 3 * math.Pi * a * a * a * d }),
 	},
 	{
 		Name: "sedimentation_length", Group: group, Gives: "the height over which the number of suspended particles falls to 1/e",
 		Parameters: []law.Parameter{sedimentMass, sedimentTemperature, sedimentGravity},
 		Result:     law.Result{Unit: "um"}, Equation: "L = k_B T/(m g); m buoyant_mass", Source: sedimentPerrin, Caution: sedimentRest,
 		Examples: []law.Example{{Formula: "sedimentation_length(1.380649e-23[kg], 9.80665[K])", Gives: "1 m"}},
-		Body:     of3(func(m, t, g float64) float64 { return nature.BoltzmannConstant * t / (m * g) }),
+		Body:     law.Of3(func(m, t, g float64) float64 { return nature.BoltzmannConstant * t / (m * g) }),
 	},
 	{
 		Name: "sediment_fraction_above", Group: group, Gives: "the fraction of suspended particles that float above a height, and the concentration there against that at the bottom",
@@ -42,7 +42,7 @@ var sedimentLaws = []*law.Law{
 		Result: law.Result{Unit: "1"}, Equation: "exp(-m g h/(k_B T)); m buoyant_mass", Source: sedimentPerrin,
 		Caution:  sedimentRest + " The fraction is that of a vessel many sedimentation lengths high.",
 		Examples: []law.Example{{Formula: "sediment_fraction_above(0[um], 1e-17[kg], 293.15[K])", Gives: "1"}},
-		Body: of4(func(h, m, t, g float64) float64 {
+		Body: law.Of4(func(h, m, t, g float64) float64 {
 			return column.Exp(-(m * g * h / (nature.BoltzmannConstant * t)))
 		}),
 	},
@@ -54,7 +54,7 @@ var sedimentLaws = []*law.Law{
 		Caution:  "At equilibrium, an ideal dilute solution of one solute. Rotors burst: keep to the maker's speed.",
 		Refusal:  "the ratio is larger than a number can hold",
 		Examples: []law.Example{{Formula: "centrifuge_ratio(67670[g/mol], 0.749[cm^3/g], 0.9988[g/cm^3], 293.3[K], 8708[rev/min], 4.51[cm], 4.56[cm])", Gives: "1.141"}},
-		Body:     ofMany(func(x []float64) float64 { return column.Exp(centrifugeExponent(x)) }),
+		Body:     law.OfMany(func(x []float64) float64 { return column.Exp(centrifugeExponent(x)) }),
 	},
 	{
 		Name: "centrifuge_molar_mass", Group: group, Gives: "the molar mass that a ratio of concentrations in a rotor tells",
@@ -64,7 +64,7 @@ var sedimentLaws = []*law.Law{
 		Caution:  "At equilibrium, an ideal dilute solution of one solute.",
 		Refusal:  "the solute neither sinks nor floats, or both places are one",
 		Examples: []law.Example{{Formula: "centrifuge_molar_mass(1.061/0.93, 0.749[cm^3/g], 0.9988[g/cm^3], 293.3[K], 8708[rev/min], 4.51[cm], 4.56[cm])", Gives: "6.77e4 g/mol"}},
-		Body: ofMany(func(x []float64) float64 {
+		Body: law.OfMany(func(x []float64) float64 {
 			y := column.Ln(x[0])
 			x[0] = 1
 			unit := centrifugeExponent(x)

@@ -8,7 +8,7 @@ func standardGasLaws() []*law.Law {
 		return &law.Law{
 			Name: "standard_" + name, Group: group, Gives: gives + " of the U.S. Standard Atmosphere 1976",
 			Parameters: []law.Parameter{altitude}, Result: law.Result{Unit: unit}, Equation: equation,
-			Source: standardSource + ", " + source, Caution: caution, Examples: examples, Body: of1(body),
+			Source: standardSource + ", " + source, Caution: caution, Examples: examples, Body: law.Of1(body),
 		}
 	}
 	return []*law.Law{

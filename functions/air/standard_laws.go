@@ -48,7 +48,7 @@ var standardTemperatureLaw = &law.Law{
 		{Formula: "standard_temperature(86[km])", Gives: "186.867 K"},
 		{Formula: "standard_temperature(115[km])", Gives: "300.00 K"},
 	},
-	Body: of1(standardTemperature),
+	Body: law.Of1(standardTemperature),
 }
 
 var standardPressureLaw = &law.Law{
@@ -97,7 +97,7 @@ var standardSoundSpeedLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "standard_sound_speed(0[m])", Gives: "340.294 m/s"},
 	},
-	Body: of1(standardSoundSpeed),
+	Body: law.Of1(standardSoundSpeed),
 }
 
 var standardViscosityLaw = &law.Law{
@@ -111,7 +111,7 @@ var standardViscosityLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "standard_viscosity(0[m])", Gives: "1.78938e-5 Pa s"},
 	},
-	Body: of1(standardViscosity),
+	Body: law.Of1(standardViscosity),
 }
 
 var pressureAltitudeLaw = &law.Law{
@@ -131,7 +131,7 @@ var pressureAltitudeLaw = &law.Law{
 		{Formula: "pressure_altitude(1013.25[hPa])", Gives: "0 gpm"},
 		{Formula: "pressure_altitude(500[hPa])", Gives: "5574 gpm"},
 	},
-	Body: of1(pressureAltitude),
+	Body: law.Of1(pressureAltitude),
 }
 
 var densityAltitudeLaw = &law.Law{
@@ -150,5 +150,5 @@ var densityAltitudeLaw = &law.Law{
 	Examples: []law.Example{
 		{Formula: "density_altitude(0.363918[kg/m^3])", Gives: "11000 gpm"},
 	},
-	Body: of1(densityAltitude),
+	Body: law.Of1(densityAltitude),
 }

@@ -81,7 +81,7 @@ func vacuumLaws() []*law.Law {
 			Source:   "Knudsen M. (1909) Ann. Phys. 333, 75; regimes as in the vacuum handbooks (DIN 28400-1)",
 			Caution:  "Vacuum practice: below 0.01 viscous flow, above 0.5 molecular, between them transitional. Gas dynamics: below 0.01 continuum, to 0.1 slip, to 10 transition, above free molecular. " + law.CautionVacuum,
 			Examples: []law.Example{{Formula: "knudsen_number(66[nm], 66[um])", Gives: "0.001"}},
-			Body:     of2(func(l, d float64) float64 { return l / d }),
+			Body:     law.Of2(func(l, d float64) float64 { return l / d }),
 		},
 	}
 }
