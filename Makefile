@@ -40,8 +40,8 @@ same-bits: module
 	@cat build/bits/amd64
 	@cd build/bits && for other in amd64-v3 module arm64; do if [ -e $$other ]; then cmp amd64 $$other && echo "$$other: the same bits as amd64" || exit 1; fi; done
 
-bench: module
-	go run ./cmd/bench -module $(MODULE)
+bench: module command
+	go run ./cmd/bench -module $(MODULE) -command $(COMMAND)
 
 check:
 	@unformatted=$$(gofmt -l .); if [ -n "$$unformatted" ]; then echo "gofmt would change:"; echo "$$unformatted"; exit 1; fi
@@ -52,6 +52,8 @@ check:
 fuzz:
 	go test ./engine/sheet -run '^$$' -fuzz FuzzParse -fuzztime 30s
 	go test ./engine/unit -run '^$$' -fuzz FuzzParse -fuzztime 30s
+	go test ./cmd/plumbrule -run '^$$' -fuzz FuzzCSV -fuzztime 30s
+	go test ./cmd/plumbrule -run '^$$' -fuzz FuzzJSONLines -fuzztime 30s
 	go test ./engine -run '^$$' -fuzz FuzzCompile -fuzztime 30s
 
 clean:

@@ -3,7 +3,7 @@
 // table of ratios. Quote the ratios, not the seconds: machines differ and
 // drift.
 //
-//	bench -module build/plumbrule.wasm [-rows 4194304] [-repeat 5]
+//	bench -module build/plumbrule.wasm [-command build/plumbrule] [-rows 4194304] [-repeat 5]
 //
 // Exit status: 0 when measured, whatever the ratios; 64 wrong usage.
 package main
@@ -44,6 +44,7 @@ func doMain(args []string, stdout, stderr io.Writer) int {
 	flags := flag.NewFlagSet("bench", flag.ContinueOnError)
 	flags.SetOutput(stderr)
 	path := flags.String("module", "build/plumbrule.wasm", "the module `file`")
+	command := flags.String("command", "", "the command `file`, to measure it on a data file; none is left out")
 	count := flags.Int("rows", 1<<22, "`rows` of a column")
 	repeat := flags.Int("repeat", 5, "how often each pair is run")
 	if flags.Parse(args) != nil || flags.NArg() > 0 || *count < 1 || *repeat < 1 {
@@ -78,6 +79,12 @@ func doMain(args []string, stdout, stderr io.Writer) int {
 	if err := printModule(b, stdout); err != nil {
 		fmt.Fprintln(stderr, "bench:", err)
 		return 64
+	}
+	if *command != "" {
+		if err := printRows(b, *command, stdout); err != nil {
+			fmt.Fprintln(stderr, "bench:", err)
+			return 64
+		}
 	}
 	return 0
 }

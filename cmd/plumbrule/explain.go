@@ -51,11 +51,14 @@ func (a *app) explain(ctx context.Context, file, entry string, assignments []str
 		message, hint, _ := strings.Cut(err.Error(), "; ")
 		return usage(o.file+": "+message, hint)
 	}
+	if err := putValues(ctx, o, e); err != nil {
+		return err
+	}
 	var text bytes.Buffer
 	if a.json {
 		a.writeJSON(&text, explained(e))
 	} else {
-		t := &tree{w: &text, digits: digits, told: map[string]bool{}}
+		t := &tree{w: &text, digits: digits, columns: a.width(), told: map[string]bool{}}
 		t.write(e, "", "")
 	}
 	if _, err := a.stdout.Write(text.Bytes()); err != nil {
@@ -69,9 +72,10 @@ func (a *app) explain(ctx context.Context, file, entry string, assignments []str
 
 // tree prints an explanation, each part indented below what it is part of.
 type tree struct {
-	w      *bytes.Buffer
-	digits int
-	told   map[string]bool // laws whose particulars stand above already
+	w       *bytes.Buffer
+	digits  int
+	columns int
+	told    map[string]bool // laws whose particulars stand above already
 }
 
 // write prints a part. first stands before its first line, rest before all
@@ -96,13 +100,13 @@ func (t *tree) write(e *engine.Explanation, first, rest string) {
 		below += "  "
 	}
 	if e.Formula != "" && !call {
-		fmt.Fprintln(t.w, below+"= "+printable(flat(e.Formula)))
+		t.text("= "+e.Formula, below, "  ")
 	}
 	if e.Reason != "" {
-		fmt.Fprintln(t.w, below+printable(e.Reason))
+		t.text(e.Reason, below, "  ")
 	}
 	if e.Note != "" {
-		fmt.Fprintln(t.w, below+"# "+printable(e.Note))
+		t.text("# "+e.Note, below, "# ")
 	}
 	if e.Law != nil {
 		t.law(e.Law, below)
@@ -116,6 +120,11 @@ func (t *tree) write(e *engine.Explanation, first, rest string) {
 	}
 }
 
+// text prints running text below a part; its further lines begin with indent.
+func (t *tree) text(text, below, indent string) {
+	t.w.WriteString(wrapped(text, below, below+indent, t.columns))
+}
+
 // law prints a law's equation, ranges and source, the first time it occurs.
 func (t *tree) law(l *law.Law, below string) {
 	if t.told[l.Name] {
@@ -123,7 +132,7 @@ func (t *tree) law(l *law.Law, below string) {
 		return
 	}
 	t.told[l.Name] = true
-	fmt.Fprintln(t.w, below+"law: "+printable(l.Gives))
+	t.text("law: "+l.Gives, below, "  ")
 	for i := range l.Parameters {
 		p := &l.Parameters[i]
 		if valid := p.Valid.Text(p.Unit); valid != "" {
@@ -133,7 +142,7 @@ func (t *tree) law(l *law.Law, below string) {
 			fmt.Fprintln(t.w, below+"computed for: "+p.Name+" "+finite)
 		}
 	}
-	fmt.Fprintln(t.w, below+"source: "+printable(l.Source))
+	t.text("source: "+l.Source, below, "  ")
 }
 
 // value is a part's value with its unit, or "" where it has none.

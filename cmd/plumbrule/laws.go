@@ -168,7 +168,7 @@ type lawDocument struct {
 
 // documentOf tells all of a law.
 func documentOf(l *law.Law) lawDocument {
-	doc := lawDocument{Name: l.Name, Group: l.Group, Signature: formula.Signature(l), Gives: l.Gives, Result: resultOf(l),
+	doc := lawDocument{Name: l.Name, Group: l.Group, Signature: formula.Signature(l), Gives: l.Gives, Result: lawResult(l),
 		Equation: l.Equation, Source: l.Source, Caution: l.Caution, Refusal: l.Refusal, Parameters: []parameterDocument{}, Examples: []exampleDocument{}}
 	for i := range l.Parameters {
 		p := &l.Parameters[i]
@@ -196,7 +196,7 @@ func takes(p *law.Parameter) string {
 	return "number"
 }
 
-func resultOf(l *law.Law) string {
+func lawResult(l *law.Law) string {
 	switch {
 	case l.Result.Type == law.Made:
 		return "a " + l.Result.Made
@@ -234,10 +234,11 @@ func (a *app) showLaw(w *bytes.Buffer, l *law.Law) error {
 			return err
 		}
 	}
-	section(w, "equation", doc.Equation)
-	section(w, "source", doc.Source)
-	section(w, "caution", doc.Caution)
-	section(w, "refused when", doc.Refusal)
+	columns := a.width()
+	section(w, "equation", doc.Equation, columns)
+	section(w, "source", doc.Source, columns)
+	section(w, "caution", doc.Caution, columns)
+	section(w, "refused when", doc.Refusal, columns)
 	for i, e := range doc.Examples {
 		if i == 0 {
 			fmt.Fprintln(w, "\nexamples")
@@ -248,12 +249,12 @@ func (a *app) showLaw(w *bytes.Buffer, l *law.Law) error {
 }
 
 // section prints a text under its name; an empty one is left out.
-func section(w *bytes.Buffer, name, text string) {
+func section(w *bytes.Buffer, name, text string, columns int) {
 	if text == "" {
 		return
 	}
 	fmt.Fprintln(w, "\n"+name)
 	for _, line := range strings.Split(text, "\n") {
-		fmt.Fprintln(w, "    "+printable(line))
+		w.WriteString(wrapped(line, "    ", "    ", columns))
 	}
 }

@@ -57,6 +57,9 @@ type app struct {
 	catalogue *law.Catalogue
 	brief     bool
 	json      bool
+	// Data files are cut into stretches of about so many bytes, or so many rows
+	// where the data is not text.
+	blockBytes, blockRows int
 }
 
 // doMain runs one command line and gives its exit status. An interrupt from
@@ -69,12 +72,17 @@ func doMain(arguments []string, stdin io.Reader, stdout, stderr io.Writer) int {
 
 // doContext is doMain under a context of the caller's.
 func doContext(ctx context.Context, arguments []string, stdin io.Reader, stdout, stderr io.Writer) int {
-	a := &app{stdin: stdin, stdout: stdout, stderr: stderr, catalogue: functions.All()}
+	a := &app{stdin: stdin, stdout: stdout, stderr: stderr, catalogue: functions.All(), blockBytes: blockBytes, blockRows: blockRows}
+	return a.execute(ctx, arguments)
+}
+
+// execute runs one command line and gives its exit status.
+func (a *app) execute(ctx context.Context, arguments []string) int {
 	root := a.rootCommand()
 	root.SetArgs(arguments)
-	root.SetIn(stdin)
-	root.SetOut(stdout)
-	root.SetErr(stderr)
+	root.SetIn(a.stdin)
+	root.SetOut(a.stdout)
+	root.SetErr(a.stderr)
 	err := root.ExecuteContext(ctx)
 	if err == nil {
 		return statusWell

@@ -21,17 +21,6 @@ const defaultDigits = 7
 // exponent only for sizes below 1e-6 or from 1e21 on. NaN gives "".
 func shortest(x float64) string { return string(appendShortest(nil, x)) }
 
-func appendShortest(to []byte, x float64) []byte {
-	if math.IsNaN(x) {
-		return to
-	}
-	size := math.Abs(x)
-	if size != 0 && (size < 1e-6 || size >= 1e21) {
-		return strconv.AppendFloat(to, x, 'e', -1, 64)
-	}
-	return strconv.AppendFloat(to, x, 'f', -1, 64)
-}
-
 // jsonNumber is a number of a JSON document; one that is not finite is null.
 type jsonNumber float64
 

@@ -1,6 +1,7 @@
 package main
 
 import (
+	"fmt"
 	"io"
 	"os"
 	"strconv"
@@ -10,28 +11,35 @@ import (
 	"golang.org/x/term"
 )
 
-// progress shows how far a run is, on a terminal only.
+// progress shows how far a run is: as a bar on a terminal, elsewhere, where it
+// is asked for, as a line now and then.
 type progress struct {
 	bar   *progressbar.ProgressBar
-	sized bool
+	lines io.Writer
+	size  int64 // of the data; below 0 where it is not known
+	said  time.Time
+	every time.Duration
 }
 
-// newProgress makes the bar of a run over so many bytes; size < 0 where the
-// length is not known. Rows that go to a terminal show by themselves how far
-// the run is, and a bar would only disturb them.
-func (a *app) newProgress(size int64, toFile bool) *progress {
+// newProgress makes the bar of a run over so much data; size < 0 where that is
+// not known. Rows that go to a terminal show by themselves how far the run is,
+// and a bar would only disturb them, unless it is forced.
+func (a *app) newProgress(size int64, toFile, forced bool) *progress {
+	p := &progress{size: size, every: time.Second}
 	f := terminal(a.stderr)
-	if f == nil || !toFile && terminal(a.stdout) != nil {
-		return &progress{}
+	switch {
+	case f != nil && (forced || toFile || terminal(a.stdout) == nil):
+		p.bar = progressbar.NewOptions64(size,
+			progressbar.OptionSetWriter(f),
+			progressbar.OptionSetWidth(30),
+			progressbar.OptionThrottle(100*time.Millisecond),
+			progressbar.OptionClearOnFinish(),
+			progressbar.OptionSetDescription("rows"),
+		)
+	case f == nil && forced:
+		p.lines = a.stderr
 	}
-	return &progress{sized: size >= 0, bar: progressbar.NewOptions64(size,
-		progressbar.OptionSetWriter(f),
-		progressbar.OptionShowBytes(size >= 0),
-		progressbar.OptionSetWidth(30),
-		progressbar.OptionThrottle(100*time.Millisecond),
-		progressbar.OptionClearOnFinish(),
-		progressbar.OptionSetDescription("rows"),
-	)}
+	return p
 }
 
 // terminal gives the terminal that w writes to, or nil.
@@ -43,17 +51,24 @@ func terminal(w io.Writer) *os.File {
 	return f
 }
 
-// at moves the bar to a place in the data. A bar that cannot be drawn is no
-// reason to stop a run.
-func (p *progress) at(bytes, rows int64) {
-	if p.bar == nil {
-		return
-	}
-	p.bar.Describe(strconv.FormatInt(rows, 10) + " rows")
-	if p.sized {
-		_ = p.bar.Set64(bytes)
-	} else {
-		_ = p.bar.Set64(rows)
+// at tells that so much of the data is done. Progress that cannot be shown is
+// no reason to stop a run.
+func (p *progress) at(taken, rows int64) {
+	switch {
+	case p.bar != nil:
+		p.bar.Describe(strconv.FormatInt(rows, 10) + " rows")
+		if p.size >= 0 {
+			_ = p.bar.Set64(min(taken, p.size))
+		} else {
+			_ = p.bar.Set64(rows)
+		}
+	case p.lines != nil && time.Since(p.said) >= p.every:
+		p.said = time.Now()
+		share := ""
+		if p.size > 0 {
+			share = fmt.Sprintf(", %d %%", min(100, 100*taken/p.size))
+		}
+		fmt.Fprintln(p.lines, "plumbrule: "+counted(rows, "row", "rows")+" done"+share)
 	}
 }
 

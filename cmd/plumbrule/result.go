@@ -88,7 +88,7 @@ func gather(o *opened, out *rows.Outcome) *resultDocument {
 			value = math.NaN()
 			result.Well = false
 		}
-		reason := reasonText(o.program, out, e, 0)
+		reason := reasonText(o.program, out, e)
 		switch entry.Role {
 		case rows.Requirement:
 			q := requireDocument{Name: entry.Name, Verdict: verdictOf(state, value), State: state.String(), Reason: reason, Note: entry.Note, Line: entry.Line, Margin: jsonNumber(math.NaN())}

@@ -57,7 +57,7 @@ func TestManyBlocks(t *testing.T) {
 		case i%1000 == 7:
 			want = fmt.Sprintf("%d,oops,,refused,line %d: length: 'oops' is not a number", i, i+2)
 		case i%1000 == 8:
-			want = fmt.Sprintf("%d,,,refused,length is missing", i)
+			want = fmt.Sprintf("%d,,,refused,length has no value", i)
 		}
 		if line != want {
 			t.Fatalf("line %d is %q, not %q", i+2, line, want)

@@ -4,10 +4,10 @@ import (
 	"bytes"
 	"cmp"
 	"fmt"
-	"math"
 	"slices"
 	"strconv"
 	"strings"
+	"time"
 
 	"plumbrule/engine/rows"
 )
@@ -40,57 +40,70 @@ type blockTally struct {
 	states  [4]int64
 	flawed  int64
 	missed  int64
-	found   map[reasonKey]*reasonTotal
-	stamps  []int // for each reason, one more than the last row that it was counted in
+	stamps  []int // for each reason and state, one more than the last row that it was counted in
 	counts  [][4]int64
 	entryOf [][4]int
-	lacks   map[int]int // for each known the last row that its lack was counted in
 }
 
-func newBlockTally() *blockTally { return &blockTally{} }
-
-func (t *blockTally) begin(b *block) {
+// count counts an evaluated block.
+func (t *blockTally) count(b *block) {
 	n := len(b.reasons)
-	*t = blockTally{found: map[reasonKey]*reasonTotal{}, stamps: make([]int, 4*n), counts: make([][4]int64, n), entryOf: make([][4]int, n), lacks: map[int]int{}}
-}
-
-// refuse counts a row with a bad cell.
-func (t *blockTally) refuse() {
-	t.states[rows.Refused]++
-	t.flawed++
-}
-
-// lack counts a row in which a known has no usable value.
-func (t *blockTally) lack(row, k int, l *lack, known *rows.Known, value float64, entry string) {
-	if last, ok := t.lacks[k]; ok && last == row {
+	*t = blockTally{stamps: zeroed(t.stamps, 4*n), counts: zeroed(t.counts, n), entryOf: zeroed(t.entryOf, n)}
+	t.countMissed(b)
+	if b.sound() {
+		t.states[rows.Sound] = int64(b.rows)
 		return
 	}
-	t.lacks[k] = row
-	key := reasonKey{l.text, rows.Refused}
-	total := t.found[key]
-	if total == nil {
-		total = &reasonTotal{reason: rows.Reason{Text: l.text, Argument: known.Name, Unit: known.Unit, Scale: known.Scale, Below: l.below}, state: rows.Refused, entry: entry}
-		t.found[key] = total
-	}
-	total.rows++
-	if !math.IsNaN(value) {
-		total.take(value)
+	for row := range b.rows {
+		if b.flaws[row] != "" {
+			t.states[rows.Refused]++
+			t.flawed++
+			continue
+		}
+		t.states[t.row(b, row)]++
 	}
 }
 
-// row counts an evaluated row: each reason once, and whether a requirement is
-// missed. What waits is not counted: the reason stands with what it waits for.
-func (t *blockTally) row(b *block, row int, worst rows.State) {
-	entries := b.entries
-	miss := false
-	for e := range entries {
-		if entries[e].Role == rows.Requirement && b.out.State(e, row).Computed() && b.out.Values[e][row] == 0 {
-			miss = true
+// zeroed gives n zero values, in the memory of an earlier slice if it is enough.
+func zeroed[T any](old []T, n int) []T {
+	if cap(old) < n {
+		return make([]T, n)
+	}
+	old = old[:n]
+	clear(old)
+	return old
+}
+
+// countMissed counts the rows in which a requirement is missed.
+func (t *blockTally) countMissed(b *block) {
+	var required []int
+	for e := range b.entries {
+		if b.entries[e].Role == rows.Requirement {
+			required = append(required, e)
 		}
-		if worst == rows.Sound {
+	}
+	if len(required) == 0 {
+		return
+	}
+	for row := range b.rows {
+		if len(b.flaws) > 0 && b.flaws[row] != "" {
 			continue
 		}
+		for _, e := range required {
+			if b.out.Values[e][row] == 0 && b.out.State(e, row).Computed() {
+				t.missed++
+				break
+			}
+		}
+	}
+}
+
+// row counts each reason of a row once and gives the row's worst state. What
+// waits is not counted: the reason stands with what it waits for.
+func (t *blockTally) row(b *block, row int) (worst rows.State) {
+	for e := range b.entries {
 		state, reason := b.out.State(e, row), b.out.Reason(e, row)
+		worst = max(worst, state)
 		if state == rows.Sound || state == rows.Waiting || reason >= len(t.counts) {
 			continue
 		}
@@ -104,13 +117,12 @@ func (t *blockTally) row(b *block, row int, worst rows.State) {
 		}
 		t.counts[reason][state]++
 	}
-	if miss {
-		t.missed++
-	}
+	return worst
 }
 
 // summary is what a whole run amounts to.
 type summary struct {
+	took       time.Duration
 	rows       int64
 	states     [4]int64
 	flawed     int64
@@ -149,14 +161,6 @@ func (s *summary) add(b *block) {
 			total.rows += n
 		}
 	}
-	for _, found := range b.tally.found {
-		total := s.of(found.reason, found.state)
-		s.befell(total, found.entry)
-		total.rows += found.rows
-		if found.hasWorst {
-			total.take(found.worst)
-		}
-	}
 	for i := range b.out.Tallies {
 		tally := &b.out.Tallies[i]
 		key := reasonKey{reasons[tally.Reason].Text, tally.State}
@@ -193,6 +197,14 @@ func (s *summary) sorted() []*reasonTotal {
 	return s.reasons
 }
 
+// rate is how many rows were written in a second. It is told where it was asked
+// for and of runs that are long enough for it to mean something.
+func (r *rowsRun) rate() (rate float64, told bool) {
+	const shortest = time.Second
+	took := r.total.took
+	return float64(r.total.rows) / took.Seconds(), took > 0 && (r.progress || took >= shortest)
+}
+
 // bad says whether some row has an entry without a number.
 func (s *summary) bad() bool { return s.states[rows.Waiting]+s.states[rows.Refused] > 0 }
 
@@ -200,6 +212,7 @@ type summaryDocument struct {
 	Sheet   string           `json:"sheet"`
 	Data    string           `json:"data"`
 	Rows    int64            `json:"rows"`
+	Rate    *jsonNumber      `json:"rows_per_second,omitempty"`
 	States  map[string]int64 `json:"states"`
 	Flawed  int64            `json:"bad_rows"`
 	Missed  int64            `json:"requirement_missed"`
@@ -219,7 +232,12 @@ type reasonDocument struct {
 func (r *rowsRun) writeSummary() error {
 	s := r.total
 	if r.json {
-		r.writeJSON(r.stderr, s.document(r.sheet, r.data))
+		doc := s.document(r.sheet, r.data)
+		if rate, told := r.rate(); told {
+			number := jsonNumber(rate)
+			doc.Rate = &number
+		}
+		r.writeJSON(r.stderr, doc)
 		return nil
 	}
 	var w bytes.Buffer
@@ -228,6 +246,9 @@ func (r *rowsRun) writeSummary() error {
 		parts = append(parts, strconv.FormatInt(s.states[state], 10)+" "+state.String())
 	}
 	fmt.Fprintln(&w, counted(s.rows, "row", "rows")+": "+strings.Join(parts, ", "))
+	if rate, told := r.rate(); told {
+		fmt.Fprintln(&w, readable(rate, 3)+" rows per second")
+	}
 	if s.flawed > 0 {
 		fmt.Fprintln(&w, counted(s.flawed, "row", "rows")+" refused for a bad cell or a wrong number of cells")
 	}

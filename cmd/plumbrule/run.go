@@ -148,17 +148,17 @@ func (r *runner) writeTable(w *bytes.Buffer, result *resultDocument) error {
 			return err
 		}
 	}
-	writeRemarks(w, result)
+	writeRemarks(w, result, r.width())
 	return nil
 }
 
 // writeRemarks prints notices and cautions.
-func writeRemarks(w *bytes.Buffer, result *resultDocument) {
+func writeRemarks(w *bytes.Buffer, result *resultDocument, columns int) {
 	if len(result.Notices)+len(result.Cautions) > 0 && w.Len() > 0 {
 		fmt.Fprintln(w)
 	}
 	for _, n := range result.Notices {
-		fmt.Fprintln(w, "notice: line "+lineText(n.Line)+": "+printable(n.Message))
+		w.WriteString(wrapped("line "+lineText(n.Line)+": "+n.Message, "notice: ", "    ", columns))
 	}
 	// Laws with one and the same caution share a line.
 	var texts []string
@@ -170,7 +170,7 @@ func writeRemarks(w *bytes.Buffer, result *resultDocument) {
 		laws[c.Text] = append(laws[c.Text], c.Law)
 	}
 	for _, text := range texts {
-		fmt.Fprintln(w, "caution: "+strings.Join(laws[text], ", ")+": "+printable(text))
+		w.WriteString(wrapped(strings.Join(laws[text], ", ")+": "+text, "caution: ", "    ", columns))
 	}
 }
 
@@ -234,7 +234,7 @@ func (r *runner) compare(ctx context.Context, o *opened, native *rows.Outcome, m
 		if a, b := native.State(e, 0), other.State(e, 0); a != b {
 			differ.row(entries[e].Name+" (state)", a.String(), b.String())
 		}
-		if a, b := reasonText(o.program, native, e, 0), reasonText(program, &other, e, 0); a != b {
+		if a, b := reasonText(o.program, native, e), reasonText(program, &other, e); a != b {
 			differ.row(entries[e].Name+" (reason)", a, b)
 		}
 	}
@@ -261,15 +261,6 @@ func bitsText(x float64) string {
 		return "none"
 	}
 	return shortest(x) + fmt.Sprintf(" (%016x)", math.Float64bits(x))
-}
-
-// reasonText gives an entry's reason in words.
-func reasonText(p rows.Program, out *rows.Outcome, entry, row int) string {
-	reason := out.Reason(entry, row)
-	if reasons := p.Reasons(); reason > 0 && reason < len(reasons) {
-		return reasons[reason].Text
-	}
-	return ""
 }
 
 // native compiles in this process, with so many workers; 0 means one a processor.
