@@ -228,7 +228,7 @@ func standardBody(quantity int, below func(altitude float64) float64) law.Body {
 	return func(dst []float64, arguments []law.Argument, _ *law.Work) {
 		altitudes := arguments[0].Values
 		if len(altitudes) != len(dst) {
-			value := notANumber
+			var value float64
 			if h := altitudes[0]; inUpper(h) {
 				value = upperAtmosphere().valueAt(quantity, h)
 			} else {

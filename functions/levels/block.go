@@ -22,6 +22,8 @@ const (
 	variance                  // variance of E/kT: the heat capacity over R
 	entropic                  // entropy over R: ln of the partition sum + mean
 	logarithm                 // ln of the partition sum
+
+	quantities = iota // how many
 )
 
 // scratch is a worker's own room for one law. Every column has a place a row.
@@ -193,6 +195,7 @@ func fill(rows []float64, x float64) {
 // (Neumaier A. (1974) Z. angew. Math. Mech. 54, 39): the errors of all steps
 // are added up apart and put back at the end.
 func twoSum(a, b float64) (sum, rest float64) {
+	a, b = float64(a), float64(b) // a product that a caller passes is rounded first
 	sum = a + b
 	part := sum - a
 	return sum, (a - (sum - part)) + (b - part)

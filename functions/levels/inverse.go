@@ -129,38 +129,34 @@ func (s *scratch) temperatureOfMean(ladder *law.Argument, row int, energy float6
 	if !(excess > 0) || !column.Finite(excess) {
 		return notANumber
 	}
+	// Solved for u = ln(excess/(k_B T)), which is small where the answer is any
+	// classical mode's, so that it keeps its digits.
 	ln := column.Ln(excess)
-	// ln of the mean height over what is wanted; it falls with ln beta.
-	f := func(at float64) float64 {
-		beta := column.Exp(at)
-		mean, _ := s.sumRow(ladder, row, beta, meanLevel)
+	f := func(u float64) float64 {
+		mean, _ := s.sumRow(ladder, row, column.Exp(u)/excess, meanLevel)
 		if mean == 0 {
 			return -1e3
 		}
-		return column.Ln(mean) - at - ln
+		return column.Ln(mean) - u
 	}
-	// kT about the energy: right for every classical mode.
-	start := -ln
-	low, high := lnBeta(hottest), lnBeta(coldest)
-	if a, b, found := bracketAround(f, start, low, high); found {
-		if at, solved := column.BracketedRoot(f, a, b); solved {
-			return temperatureAt(at)
+	low, high := lnBeta(hottest)+ln, lnBeta(coldest)+ln
+	if a, b, found := bracketAround(f, 0, low, high); found {
+		if u, solved := column.BracketedRoot(f, a, b); solved {
+			return float64(excess*column.Exp(-u)) / nature.BoltzmannConstant
 		}
 		return notANumber
 	}
-	// At negative temperature the mean rises with ln of 1/(k_B |T|).
-	g := func(at float64) float64 {
-		beta := -column.Exp(at)
-		mean, _ := s.sumRow(ladder, row, beta, meanLevel)
-		height := mean / beta
-		if !(height > 0) {
+	// At negative temperature the mean rises with ln(excess/(k_B |T|)).
+	g := func(u float64) float64 {
+		mean, _ := s.sumRow(ladder, row, -column.Exp(u)/excess, meanLevel)
+		if !(mean < 0) {
 			return notANumber
 		}
-		return ln - column.Ln(height)
+		return u - column.Ln(-mean)
 	}
-	if a, b, found := bracketAround(g, start, low, high); found {
-		if at, solved := column.BracketedRoot(g, a, b); solved {
-			return -temperatureAt(at)
+	if a, b, found := bracketAround(g, 0, low, high); found {
+		if u, solved := column.BracketedRoot(g, a, b); solved {
+			return -float64(excess*column.Exp(-u)) / nature.BoltzmannConstant
 		}
 	}
 	return notANumber

@@ -28,6 +28,10 @@ func builderOf(maker *law.Law) builder {
 		return buildSpinRotor
 	case symmetricTopLaw:
 		return buildSymmetricTop
+	case asymmetricTopLaw:
+		return buildAsymmetricTop
+	case hinderedRotorLaw:
+		return buildHinderedRotor
 	case vibratingRotorLaw:
 		return buildVibratingRotor
 	case spinLevelsLaw:

@@ -168,7 +168,7 @@ func warmTop(a, b, symmetry float64, want quantity) (value float64, ok bool) {
 	}
 	ln := 0.0
 	if want == logarithm || want == entropic {
-		ln = float64(b/4) + 0.5*column.Ln(math.Pi/a) - column.Ln(b) + column.Log1p(s) - column.Ln(symmetry)
+		ln = float64(b/4) + float64(0.5*column.Ln(math.Pi/a)) - column.Ln(b) + column.Log1p(s) - column.Ln(symmetry)
 	}
 	slope := polynomial(y, rotor1, 2*rotor2, 3*rotor3, 4*rotor4, 5*rotor5, 6*rotor6, 7*rotor7, 8*rotor8) / (1 + s)
 	mean := 1.5 - float64(b/4) - float64(y*slope)

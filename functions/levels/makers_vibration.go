@@ -165,7 +165,7 @@ func roomyBox(a float64, want quantity) (value float64, ok bool) {
 	if !(a > 0 && a < 0.01) {
 		return 0, false
 	}
-	half := 0.5 * math.Sqrt(math.Pi/a)
+	half := float64(0.5 * math.Sqrt(math.Pi/a))
 	sum := half - 0.5
 	mean := float64(0.5*half)/sum - a
 	switch want {

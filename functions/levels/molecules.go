@@ -133,7 +133,7 @@ func (p *polyatomic) quantity(beta float64, want quantity) float64 {
 		sum = rotorQuantity(p.b*scale, p.symmetry, want)
 	} else {
 		x := float64(float64(p.a*scale)*float64(p.b*scale)) * float64(p.c*scale)
-		ln := 0.5*column.Ln(math.Pi/x) - column.Ln(p.symmetry)
+		ln := float64(0.5*column.Ln(math.Pi/x)) - column.Ln(p.symmetry)
 		switch want {
 		case logarithm:
 			sum = ln

@@ -85,7 +85,8 @@ func (s *scratch) addMirrored(mode *law.Argument, row int, beta float64, want qu
 func (b *levelSet) mirror(of *levelSet, highest float64) {
 	b.numbers = append(b.numbers[:0], of.numbers...)
 	b.energy, b.weight, b.runs = b.energy[:0], b.weight[:0], b.runs[:0]
-	b.span, b.truncated, b.tooMany, b.sorted, b.memo = math.Inf(1), false, false, false, false
+	b.span, b.truncated, b.tooMany, b.sorted = math.Inf(1), false, false, false
+	b.known = [quantities]bool{}
 	for k := len(of.runs) - 1; k >= 0; k-- {
 		from := 0
 		if k > 0 {

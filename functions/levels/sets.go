@@ -47,15 +47,17 @@ type levelSet struct {
 	order   []int     // levels by energy, made when first asked for
 	sorted  bool
 
+	diagonal, side []float64 // of a matrix
+
 	numbers, next []float64 // the arguments that the set was built for
 	span          float64   // J above the first excited level that were asked for
 	truncated     bool      // levels above were left out
 	tooMany       bool
 	usable        bool
 
-	memoBeta, memoValue float64 // a row like the one before is not computed again
-	memoWant            quantity
-	memo                bool
+	// Rows like the one before are not computed again.
+	known              [quantities]bool
+	knownBeta, knownAs [quantities]float64
 }
 
 // gather puts all numbers of a maker's arguments in a row into next.
@@ -100,7 +102,8 @@ func (b *levelSet) prepare(build builder, items []law.Argument, row int, beta fl
 	}
 	b.numbers = append(b.numbers[:0], b.next...)
 	b.energy, b.weight, b.runs = b.energy[:0], b.weight[:0], b.runs[:0]
-	b.span, b.truncated, b.tooMany, b.sorted, b.memo = span, false, false, false, false
+	b.span, b.truncated, b.tooMany, b.sorted = span, false, false, false
+	b.known = [quantities]bool{}
 	b.usable = build(b, items, b.numbers) && !b.tooMany && len(b.energy) > 0 && b.settle()
 	return b.usable
 }
@@ -178,11 +181,11 @@ func countUpTo(energy []float64, ceiling float64) int {
 
 // quantity gives a quantity of the set at 1/(k_B T) = beta.
 func (b *levelSet) quantity(beta float64, want quantity) float64 {
-	if b.memo && b.memoWant == want && b.memoBeta == beta {
-		return b.memoValue
+	if b.known[want] && b.knownBeta[want] == beta {
+		return b.knownAs[want]
 	}
 	value := b.compute(beta, want)
-	b.memo, b.memoWant, b.memoBeta, b.memoValue = true, want, beta, value
+	b.known[want], b.knownBeta[want], b.knownAs[want] = true, beta, value
 	return value
 }
 

@@ -19,7 +19,7 @@ type instance struct {
 	programs map[int32]*open
 	next     int32
 	recent   [2]recent
-	latest   *open // the program of the last run
+	latest   *open  // the program of the last run
 	doc      []byte // the last document; valid until the next call
 	fault    string
 }
