@@ -12,7 +12,7 @@ func chain(n int) string {
 	var b strings.Builder
 	b.WriteString("known x0 [m] = 1\n")
 	for i := 1; i <= n; i++ {
-		fmt.Fprintf(&b, "derive x%d [m] = x%d * 0.999 + %d[mm]\n", i, i-1, i%17)
+		fmt.Fprintf(&b, "derive x%d [m] = x%d * 0.9 + %d[mm]\n", i, i-1, i%7)
 	}
 	return b.String()
 }

@@ -3,6 +3,7 @@ package levels
 import (
 	"math"
 	"slices"
+	"sync"
 
 	"plumbrule/engine/column"
 	"plumbrule/engine/law"
@@ -42,8 +43,7 @@ type levelSet struct {
 	ground float64 // states at the lowest energy
 
 	excited []float64 // weight, and 0 for levels at the lowest energy
-	share   []float64 // excited times exp(-energy beta)
-	counts  []int     // how many levels of each run count in a row
+	share   []float64 // of one run: excited times exp(-energy beta)
 	order   []int     // levels by energy, made when first asked for
 	sorted  bool
 
@@ -54,6 +54,7 @@ type levelSet struct {
 	truncated     bool      // levels above were left out
 	tooMany       bool
 	usable        bool
+	borrowed      bool // energy, weight, runs and excited belong to a fixed set
 
 	// Rows like the one before are not computed again.
 	known              [quantities]bool
@@ -100,12 +101,68 @@ func (b *levelSet) prepare(build builder, items []law.Argument, row int, beta fl
 		}
 		span *= 4 // a rising temperature shall not build at each row
 	}
+	if len(b.next) == 0 {
+		return b.borrow(fixedSet(build, items))
+	}
+	if b.borrowed {
+		b.energy, b.weight, b.runs, b.excited, b.borrowed = nil, nil, nil, nil, false
+	}
 	b.numbers = append(b.numbers[:0], b.next...)
 	b.energy, b.weight, b.runs = b.energy[:0], b.weight[:0], b.runs[:0]
 	b.span, b.truncated, b.tooMany, b.sorted = span, false, false, false
 	b.known = [quantities]bool{}
 	b.usable = build(b, items, b.numbers) && !b.tooMany && len(b.energy) > 0 && b.settle()
 	return b.usable
+}
+
+// fixedSets holds the sets of ladders that no number tells, only names: atoms
+// and molecules of the tables. Each is built once, whole, when first asked for,
+// and does not change: all workers and all calls of a sheet read the same one.
+var fixedSets struct {
+	sync.Mutex
+	of map[string]*levelSet
+}
+
+// fixedSet gives the whole set of a ladder that is told by names alone.
+func fixedSet(build builder, items []law.Argument) *levelSet {
+	key := ""
+	for i := range items {
+		key += items[i].Text + "|"
+	}
+	fixedSets.Lock()
+	defer fixedSets.Unlock()
+	if set := fixedSets.of[key]; set != nil {
+		return set
+	}
+	set := &levelSet{span: math.Inf(1)}
+	set.usable = build(set, items, nil) && !set.tooMany && len(set.energy) > 0 && set.settle()
+	if fixedSets.of == nil {
+		fixedSets.of = map[string]*levelSet{}
+	}
+	fixedSets.of[key] = set
+	return set
+}
+
+// borrow takes over the levels of a fixed set.
+func (b *levelSet) borrow(from *levelSet) bool {
+	b.energy, b.weight, b.runs, b.excited, b.borrowed = from.energy, from.weight, from.runs, from.excited, true
+	b.lowest, b.first, b.ground = from.lowest, from.first, from.ground
+	b.span, b.truncated, b.tooMany, b.sorted = from.span, false, from.tooMany, false
+	b.numbers = b.numbers[:0]
+	b.known = [quantities]bool{}
+	b.share = room(b.share, from.longestRun())
+	b.usable = from.usable
+	return b.usable
+}
+
+// longestRun gives how many levels the longest run has.
+func (b *levelSet) longestRun() int {
+	longest, from := 0, 0
+	for _, to := range b.runs {
+		longest = max(longest, to-from)
+		from = to
+	}
+	return longest
 }
 
 // ceiling gives the energy up to which levels are wanted, from that of the
@@ -142,7 +199,7 @@ func (b *levelSet) settle() bool {
 	}
 	b.lowest, b.first, b.ground = lowest, math.Inf(1), 0
 	b.excited = append(b.excited[:0], b.weight...)
-	b.share = room(b.share, len(b.energy))
+	b.share = room(b.share, b.longestRun())
 	for i, e := range b.energy {
 		height := e - lowest
 		b.energy[i] = height
@@ -192,16 +249,11 @@ func (b *levelSet) quantity(beta float64, want quantity) float64 {
 func (b *levelSet) compute(beta float64, want quantity) float64 {
 	var excited, moment total
 	ceiling := b.first + reach/beta
-	b.counts = b.counts[:0]
 	from := 0
 	for _, to := range b.runs {
 		n := countUpTo(b.energy[from:to], ceiling)
-		b.counts = append(b.counts, n)
-		energy, share, weight := b.energy[from:from+n], b.share[from:from+n], b.excited[from:from+n]
-		for i, e := range energy {
-			share[i] = -float64(e * beta)
-		}
-		column.ExpColumn(share, share)
+		energy, weight := b.energy[from:from+n], b.excited[from:from+n]
+		share := b.exponentials(energy, beta)
 		if want == partition || want == logarithm {
 			addShares(&excited, share, weight)
 		} else {
@@ -224,18 +276,31 @@ func (b *levelSet) compute(beta float64, want quantity) float64 {
 	case entropic:
 		return column.Ln(b.ground) + column.Log1p(rest/b.ground) + mean
 	}
-	// About the mean: no difference of large numbers.
+	// About the mean in a second pass: no difference of large numbers.
 	var square total
 	square.add(float64(b.ground * float64(mean*mean)))
 	from = 0
-	for k, to := range b.runs {
-		for i, e := range b.energy[from : from+b.counts[k]] {
+	for _, to := range b.runs {
+		n := countUpTo(b.energy[from:to], ceiling)
+		energy, weight := b.energy[from:from+n], b.excited[from:from+n]
+		share := b.exponentials(energy, beta)
+		for i, e := range energy {
 			d := float64(e*beta) - mean
-			square.add(float64(b.share[from+i] * float64(d*d)))
+			square.add(float64(float64(share[i]*weight[i]) * float64(d*d)))
 		}
 		from = to
 	}
 	return square.value() / sum
+}
+
+// exponentials gives exp(-energy beta) of the levels of a run.
+func (b *levelSet) exponentials(energy []float64, beta float64) []float64 {
+	share := b.share[:len(energy)]
+	for i, e := range energy {
+		share[i] = -float64(e * beta)
+	}
+	column.ExpColumn(share, share)
+	return share
 }
 
 // addShares turns exponentials into shares weight times exponential and adds

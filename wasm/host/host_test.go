@@ -101,7 +101,11 @@ func TestDemoSheetsGiveTheSameBits(t *testing.T) {
 				t.Fatal(err)
 			}
 			native, module := both(t, m, string(text), nil)
-			for _, n := range []int{0, 1, 7, 1024, 30_000} {
+			sizes := []int{0, 1, 7, 1100}
+			if filepath.Base(path) == "release.plumb" {
+				sizes = append(sizes, 300_000) // split over the pool's instances
+			}
+			for _, n := range sizes {
 				in := rows.Input{Rows: n, Values: make([][]float64, len(native.Describe().Knowns))}
 				for k, known := range native.Describe().Knowns {
 					if n > 1 && k%2 == 0 && known.Form == rows.Number {
