@@ -41,7 +41,8 @@ func (p *Program) Run(ctx context.Context, in rows.Input, out *rows.Outcome, wor
 		return ctx.Err()
 	}
 	w := p.takeWorker(s)
-	if len(s.each) == 0 && len(s.inputs) == 0 && w.quickSingles(in) {
+	sound := w.begin(in)
+	if sound && len(s.each) == 0 && len(s.inputs) == 0 {
 		for e, slot := range p.outputs {
 			values, x := out.Values[e], w.single[slot]
 			for i := range values {
@@ -53,7 +54,6 @@ func (p *Program) Run(ctx context.Context, in rows.Input, out *rows.Outcome, wor
 	}
 	r := &w.alone
 	r.p, r.in, r.out = p, in, out
-	w.begin(in)
 	for b := 0; b < blocks && ctx.Err() == nil; b++ {
 		r.block(w, b)
 	}

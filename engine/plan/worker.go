@@ -87,12 +87,13 @@ func (c *call) lay(a *law.Argument, plan *argumentPlan) {
 	}
 }
 
-// begin sets the single inputs and computes what no row changes.
-func (w *worker) begin(in rows.Input) {
+// begin sets the single inputs and computes what no row changes. It says
+// whether all of that is sound.
+func (w *worker) begin(in rows.Input) (sound bool) {
 	w.release(0)
 	w.careful = 0
 	if w.s.quick != nil && w.quickSingles(in) {
-		return
+		return true
 	}
 	w.release(0)
 	for k := range w.p.knowns {
@@ -111,6 +112,7 @@ func (w *worker) begin(in rows.Input) {
 			w.careful = math.MaxInt
 		}
 	}
+	return false
 }
 
 // mostCareful is how many blocks are run with care after one that was not

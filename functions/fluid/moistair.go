@@ -56,8 +56,8 @@ func airLaws() []*law.Law {
 func moistAirBody(dst []float64, arguments []law.Argument, _ *law.Work) {
 	pressures, temperatures := arguments[0].Values, arguments[1].Values
 	humidities, dioxides := arguments[2].Values, arguments[3].Values
-	pressureStep, temperatureStep := step(pressures), step(temperatures)
-	humidityStep, dioxideStep := step(humidities), step(dioxides)
+	pressureStep, temperatureStep := column.Stride(pressures), column.Stride(temperatures)
+	humidityStep, dioxideStep := column.Stride(humidities), column.Stride(dioxides)
 	for i := range dst {
 		dst[i] = moistAirDensity(pressures[i*pressureStep], temperatures[i*temperatureStep],
 			humidities[i*humidityStep], dioxides[i*dioxideStep])

@@ -1,6 +1,7 @@
 package fluid
 
 import (
+	"plumbrule/engine/column"
 	"plumbrule/engine/law"
 	"plumbrule/functions/nature"
 )
@@ -53,7 +54,7 @@ func ofSea(f func(s, t, p float64) float64) law.Body {
 	return func(dst []float64, arguments []law.Argument, _ *law.Work) {
 		scale := scaleFactor(&arguments[3])
 		salinities, temperatures, pressures := arguments[0].Values, arguments[1].Values, arguments[2].Values
-		salinityStep, temperatureStep, pressureStep := step(salinities), step(temperatures), step(pressures)
+		salinityStep, temperatureStep, pressureStep := column.Stride(salinities), column.Stride(temperatures), column.Stride(pressures)
 		for i := range dst {
 			dst[i] = f(
 				salinities[i*salinityStep],

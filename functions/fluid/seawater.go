@@ -47,14 +47,6 @@ func seaWaterLaws() []*law.Law {
 	}}
 }
 
-// step is 1 along a column and 0 for a single number that serves all rows.
-func step(values []float64) int {
-	if len(values) > 1 {
-		return 1
-	}
-	return 0
-}
-
 // seaWaterDensity gives the density of sea water in kg/m^3 from the practical
 // salinity, the temperature in degC on IPTS-68 and the sea pressure in bar:
 // EOS-80 as printed in UNESCO 44, section 3. Every polynomial is in Horner's

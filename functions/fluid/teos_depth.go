@@ -122,7 +122,7 @@ func teosOceanLaws() []*law.Law {
 // pressure.
 func seaDensityTeosBody(dst []float64, arguments []law.Argument, _ *law.Work) {
 	salinities, temperatures, pressures := arguments[0].Values, arguments[1].Values, arguments[2].Values
-	salinityStep, temperatureStep, pressureStep := step(salinities), step(temperatures), step(pressures)
+	salinityStep, temperatureStep, pressureStep := column.Stride(salinities), column.Stride(temperatures), column.Stride(pressures)
 	for i := range dst {
 		dst[i] = 1 / seaSpecificVolume(
 			salinities[i*salinityStep]*1e3,
