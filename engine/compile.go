@@ -4,7 +4,6 @@ import (
 	"strings"
 
 	"plumbrule/engine/formula"
-	"plumbrule/engine/law"
 	"plumbrule/engine/plan"
 	"plumbrule/engine/problem"
 	"plumbrule/engine/rows"
@@ -14,8 +13,7 @@ import (
 
 // compilation is a sheet on its way to a program.
 type compilation struct {
-	catalogue   *law.Catalogue
-	choices     map[string][]string
+	source
 	problems    problem.List
 	lines       []string
 	symbols     map[string]*symbol
@@ -46,14 +44,16 @@ type symbol struct {
 	entry   int // index among the entries
 }
 
-func compile(text string, catalogue *law.Catalogue, choices map[string][]string) (*Program, error) {
+// compile makes a program; the compilation, with its trees, serves what asks
+// how a number came about.
+func compile(from source) (*Program, *compilation, error) {
 	c := &compilation{
-		catalogue: catalogue, choices: choices, lines: strings.Split(strings.TrimPrefix(text, byteOrderMark), "\n"),
+		source: from, lines: strings.Split(strings.TrimPrefix(from.text, byteOrderMark), "\n"),
 		symbols: map[string]*symbol{}, noticed: map[string]bool{}, graph: plan.NewGraph(), parser: formula.NewParser(),
 	}
-	read := sheet.Parse(text, &c.problems)
+	read := sheet.Parse(from.text, &c.problems)
 	c.scope = &formula.Scope{
-		Catalogue: catalogue,
+		Catalogue: from.catalogue,
 		Lookup: func(name string) (formula.Symbol, bool) {
 			s, ok := c.symbols[name]
 			if !ok {
@@ -76,12 +76,12 @@ func compile(text string, catalogue *law.Catalogue, choices map[string][]string)
 	}
 	c.checkOthers(read)
 	if !c.problems.Empty() {
-		return nil, &SheetError{Problems: c.problems.Sorted()}
+		return nil, nil, &SheetError{Problems: c.problems.Sorted()}
 	}
 	c.listEntries()
 	built := plan.Build(c.graph, c.knowns, c.entries, c.textAt)
 	c.description.Cost = built.Cost()
-	return &Program{plan: built, description: c.description, sheet: read, compiled: c}, nil
+	return &Program{plan: built, description: c.description, source: from}, c, nil
 }
 
 // byteOrderMark may stand before a sheet's first character.

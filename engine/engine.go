@@ -26,6 +26,7 @@ type (
 	Outcome     = rows.Outcome
 	Description = rows.Description
 	State       = rows.State
+	Session     = rows.Session
 	SheetError  = rows.SheetError
 )
 
@@ -39,7 +40,7 @@ type Native struct {
 // Compile turns a sheet into a program. choices adds choices to text knowns.
 // The error of a sheet with problems is a *SheetError.
 func (n Native) Compile(_ context.Context, text string, choices map[string][]string) (rows.Program, error) {
-	p, err := compile(text, n.Catalogue, choices)
+	p, _, err := compile(source{text, n.Catalogue, choices})
 	if err != nil {
 		return nil, err
 	}
@@ -50,16 +51,24 @@ func (n Native) Compile(_ context.Context, text string, choices map[string][]str
 // Compile turns a sheet into a program that runs in this process on all
 // processors. The error of a sheet with problems is a *SheetError.
 func Compile(text string, catalogue *law.Catalogue) (*Program, error) {
-	return compile(text, catalogue, nil)
+	p, _, err := compile(source{text: text, catalogue: catalogue})
+	return p, err
 }
 
 // Program is a compiled sheet. It serves several goroutines at once.
 type Program struct {
 	plan        *plan.Program
 	description rows.Description
-	sheet       *sheet.Sheet
-	compiled    *compilation
+	source      source
 	workers     int
+}
+
+// source is what a program was made from. What explains a number is made from
+// it again, so that a program holds no trees.
+type source struct {
+	text      string
+	catalogue *law.Catalogue
+	choices   map[string][]string
 }
 
 // Describe tells the program's knowns and entries.
@@ -77,11 +86,12 @@ func (p *Program) Run(ctx context.Context, in rows.Input, out *rows.Outcome) err
 	return p.plan.Run(ctx, in, out, workers)
 }
 
+// NewSession begins a session: one row whose numbers are kept, so that a change
+// computes again only what depends on it.
+func (p *Program) NewSession(context.Context) (Session, error) { return p.plan.NewSession(), nil }
+
 // Close gives the program's memory back.
 func (p *Program) Close() error { return nil }
-
-// Sheet is the sheet's text, taken apart.
-func (p *Program) Sheet() *sheet.Sheet { return p.sheet }
 
 // Tidy gives a sheet's text in the canonical layout, with every note kept. The
 // error of a sheet that cannot be read is a *SheetError.

@@ -34,10 +34,14 @@ type Explanation struct {
 // Explain evaluates one row and tells how the number of a known, an entry or a
 // requirement came about.
 func (p *Program) Explain(in rows.Input, name string) (*Explanation, error) {
-	s := p.compiled.symbols[name]
+	p, c, err := compile(p.source)
+	if err != nil {
+		return nil, err
+	}
+	s := c.symbols[name]
 	if s == nil || s.Table != nil || s.Law != nil {
 		message := "the sheet gives no entry '" + name + "'"
-		if near := problem.Nearest(name, p.compiled.names); near != "" {
+		if near := problem.Nearest(name, c.names); near != "" {
 			message += "; did you mean " + near + "?"
 		}
 		return nil, errors.New(message)
@@ -46,18 +50,19 @@ func (p *Program) Explain(in rows.Input, name string) (*Explanation, error) {
 	if err != nil {
 		return nil, err
 	}
-	x := &explainer{p: p, trace: trace, seen: map[string]bool{}}
+	x := &explainer{p: p, c: c, trace: trace, seen: map[string]bool{}}
 	return x.name(name), nil
 }
 
 type explainer struct {
 	p     *Program
+	c     *compilation
 	trace *plan.Trace
 	seen  map[string]bool
 }
 
 func (x *explainer) name(name string) *Explanation {
-	s := x.p.compiled.symbols[name]
+	s := x.c.symbols[name]
 	e := &Explanation{Name: name, Unit: s.unit.Text(), Scale: scale(s.unit), Form: rows.Number}
 	x.value(e, s.Node)
 	if s.Node != nil && s.Node.Type.Shape == formula.TruthShape {
@@ -126,7 +131,7 @@ func (x *explainer) below(e *formula.Expression) []*Explanation {
 
 func (x *explainer) member(e *formula.Expression) *Explanation {
 	part := &Explanation{Name: e.Word + "." + e.Field, Form: rows.Number}
-	if constant, ok := x.p.compiled.catalogue.Constant(e.Field); ok && e.Word == "nature" {
+	if constant, ok := x.c.catalogue.Constant(e.Field); ok && e.Word == "nature" {
 		part.Note = constant.Meaning + "; " + constant.Source
 		x.value(part, e.Node)
 		x.unit(part, constant.Unit)
@@ -144,9 +149,9 @@ func (x *explainer) unit(part *Explanation, text string) {
 
 // call explains a law's call; the mathematical functions explain themselves.
 func (x *explainer) call(e *formula.Expression) *Explanation {
-	part := &Explanation{Name: e.Word, Formula: x.p.compiled.textAt(e.Whole()), Form: rows.Number}
-	l := x.p.compiled.catalogue.Law(e.Word)
-	own := x.p.compiled.symbols[e.Word]
+	part := &Explanation{Name: e.Word, Formula: x.c.textAt(e.Whole()), Form: rows.Number}
+	l := x.c.catalogue.Law(e.Word)
+	own := x.c.symbols[e.Word]
 	if l == nil && own == nil {
 		return nil
 	}

@@ -54,7 +54,7 @@ func checkSheet(t *testing.T, text string) (compiled bool) {
 	t.Helper()
 	program, err := engine.Compile(text, functions.All())
 	if err == nil {
-		checkProgram(t, program)
+		checkProgram(t, text, program)
 		return true
 	}
 	var sheetError *engine.SheetError
@@ -73,9 +73,9 @@ func checkSheet(t *testing.T, text string) (compiled bool) {
 }
 
 // checkProgram runs a program with and without its knowns replaced.
-func checkProgram(t *testing.T, program *engine.Program) {
+func checkProgram(t *testing.T, text string, program *engine.Program) {
 	d := program.Describe()
-	for _, statement := range program.Sheet().Statements {
+	for _, statement := range sheet.Parse(text, &problem.List{}).Statements {
 		name := ""
 		switch s := statement.(type) {
 		case *sheet.Derive:

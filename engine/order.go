@@ -1,6 +1,7 @@
 package engine
 
 import (
+	"slices"
 	"strconv"
 	"strings"
 
@@ -11,8 +12,10 @@ import (
 func itoa(n int) string { return strconv.Itoa(n) }
 
 // ordered gives the names with formulas in an order in which each comes after
-// all that it needs, found by counting what is still needed (Kahn 1962). Names
-// that need each other in a circle are reported and left out as broken.
+// all that it needs, found by counting what is still needed (Kahn 1962). What a
+// name has made ready comes next, so that values are read soon after they are
+// made. Names that need each other in a circle are reported and left out as
+// broken.
 func (c *compilation) ordered() []*symbol {
 	users := map[string][]*symbol{}
 	waiting := map[*symbol]int{}
@@ -31,13 +34,14 @@ func (c *compilation) ordered() []*symbol {
 			free = append(free, s)
 		}
 	}
+	slices.Reverse(free) // the last one is taken first
 	var order []*symbol
 	for len(free) > 0 {
-		s := free[0]
-		free = free[1:]
+		s := free[len(free)-1]
+		free = free[:len(free)-1]
 		order = append(order, s)
 		delete(waiting, s)
-		for _, user := range users[s.name.Value] {
+		for _, user := range slices.Backward(users[s.name.Value]) {
 			waiting[user]--
 			if waiting[user] == 0 {
 				free = append(free, user)

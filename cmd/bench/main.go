@@ -76,6 +76,10 @@ func doMain(args []string, stdout, stderr io.Writer) int {
 		fmt.Fprintln(stderr, "bench:", err)
 		return 64
 	}
+	if err := printSession(b, stdout); err != nil {
+		fmt.Fprintln(stderr, "bench:", err)
+		return 64
+	}
 	if err := printModule(b, stdout); err != nil {
 		fmt.Fprintln(stderr, "bench:", err)
 		return 64

@@ -15,27 +15,11 @@ import (
 // whose value is known before the first row is a constant.
 type Graph struct {
 	nodes []*formula.Node
-	index map[key]*formula.Node
-}
-
-// key tells equal nodes: the operation, what it works on and its type.
-type key struct {
-	op         formula.Op
-	law        *law.Law
-	bits       uint64
-	index      int
-	text       string
-	t          formula.Type
-	a, b, c    int
-	more       string // IDs of further arguments
-	numbers    *float64
-	numberSize int
+	index []int32 // open addressing: 1 + the ID of a node, 0 where free
 }
 
 // NewGraph makes an empty graph.
-func NewGraph() *Graph {
-	return &Graph{index: map[key]*formula.Node{}}
-}
+func NewGraph() *Graph { return &Graph{index: make([]int32, 64)} }
 
 // Make gives the node equal to n, made if it is new. It is the formula room's
 // way of making nodes.
@@ -43,35 +27,68 @@ func (g *Graph) Make(n formula.Node) *formula.Node {
 	if folded, ok := g.fold(&n); ok {
 		n = folded
 	}
-	k := key{op: n.Op, law: n.Law, bits: math.Float64bits(n.Value), index: n.Index, text: n.Text, t: n.Type, a: -1, b: -1, c: -1}
-	for i, a := range n.Args {
-		switch i {
-		case 0:
-			k.a = a.ID
-		case 1:
-			k.b = a.ID
-		case 2:
-			k.c = a.ID
-		}
+	at := g.find(&n)
+	if known := g.index[at]; known > 0 {
+		return g.nodes[known-1]
 	}
-	if len(n.Args) > 3 {
-		more := make([]byte, 0, 4*len(n.Args))
-		for _, a := range n.Args[3:] {
-			more = append(more, byte(a.ID), byte(a.ID>>8), byte(a.ID>>16), byte(a.ID>>24))
-		}
-		k.more = string(more)
-	}
-	if len(n.Numbers) > 0 {
-		k.numbers, k.numberSize = &n.Numbers[0], len(n.Numbers)
-	}
-	if known, ok := g.index[k]; ok {
-		return known
-	}
-	made := n
+	made := new(formula.Node)
+	*made = n
 	made.ID = len(g.nodes)
-	g.nodes = append(g.nodes, &made)
-	g.index[k] = &made
-	return &made
+	g.nodes = append(g.nodes, made)
+	g.index[at] = int32(len(g.nodes))
+	if 4*len(g.nodes) > 3*len(g.index) {
+		g.grow()
+	}
+	return made
+}
+
+// find gives the place in the index of the node equal to n, or the free place
+// where it belongs.
+func (g *Graph) find(n *formula.Node) int {
+	most := len(g.index) - 1
+	for at := int(digest(n)) & most; ; at = (at + 1) & most {
+		if known := g.index[at]; known == 0 || equal(g.nodes[known-1], n) {
+			return at
+		}
+	}
+}
+
+func (g *Graph) grow() {
+	g.index = make([]int32, 2*len(g.index))
+	for id, n := range g.nodes {
+		g.index[g.find(n)] = int32(id + 1)
+	}
+}
+
+// digest is a number that equal nodes share: what tells most nodes apart,
+// mixed by multiplication (Knuth, The Art of Computer Programming 3, 6.4).
+func digest(n *formula.Node) uint32 {
+	const odd = 0x9E3779B97F4A7C15
+	h := uint64(n.Op)*odd + math.Float64bits(n.Value)
+	h = (h ^ h>>32) * odd
+	h += uint64(n.Index) + uint64(len(n.Numbers))<<32
+	for _, a := range n.Args {
+		h = (h^h>>29)*odd + uint64(a.ID)
+	}
+	for i := range len(n.Text) {
+		h = (h^h>>29)*odd + uint64(n.Text[i])
+	}
+	h = (h ^ h>>32) * odd
+	return uint32(h >> 32)
+}
+
+// equal says whether two nodes compute the same: the operation, what it works
+// on and its type.
+func equal(a, b *formula.Node) bool {
+	if a.Op != b.Op || a.Law != b.Law || math.Float64bits(a.Value) != math.Float64bits(b.Value) || a.Index != b.Index || len(a.Args) != len(b.Args) || a.Text != b.Text || a.Type != b.Type || len(a.Numbers) != len(b.Numbers) {
+		return false
+	}
+	for i := range a.Args {
+		if a.Args[i] != b.Args[i] {
+			return false
+		}
+	}
+	return len(a.Numbers) == 0 || &a.Numbers[0] == &b.Numbers[0]
 }
 
 // fold computes a node whose arguments are constant. A call outside a law's

@@ -35,10 +35,10 @@ type EntrySpec struct {
 // serves several goroutines.
 type Program struct {
 	knowns  []KnownSpec
-	entries []EntrySpec
-	slots   []slot // in an order in which arguments come before users
-	outputs []int  // slot of each entry
-	inputs  []int  // slot of each known, -1 where nothing reads it
+	entries []string // their names
+	slots   []slot   // in an order in which arguments come before users
+	outputs []int    // slot of each entry
+	inputs  []int    // slot of each known, -1 where nothing reads it
 	reasons []rows.Reason
 	missing []int32    // reason of each known without a value
 	wait    []int32    // by slot: the reason "waits for NAME"; 0 for slots that are not an entry's
@@ -61,7 +61,6 @@ type slot struct {
 	risk      int32 // the reason when an operation makes no finite number of finite ones
 	guard     int32
 	alias     bool // the value is that of args[0]
-	node      *formula.Node
 }
 
 // argumentPlan says how one argument of a law is put together.
@@ -87,7 +86,7 @@ type check struct {
 // user's text of a place, for reasons.
 func Build(graph *Graph, knowns []KnownSpec, entries []EntrySpec, source func(problem.Span) string) *Program {
 	b := &builder{
-		p:       &Program{knowns: knowns, entries: entries, reasons: make([]rows.Reason, 1)},
+		p:       &Program{knowns: knowns, reasons: make([]rows.Reason, 1)},
 		slotOf:  make([]int, len(graph.nodes)),
 		reasons: map[reasonKey]int32{},
 		texts:   map[string]int32{},
@@ -111,6 +110,13 @@ func Build(graph *Graph, knowns []KnownSpec, entries []EntrySpec, source func(pr
 			needed[a.ID] = true
 		}
 	}
+	steps := 0
+	for _, n := range needed {
+		if n {
+			steps++
+		}
+	}
+	b.p.slots, b.p.wait = make([]slot, 0, steps), make([]int32, 0, steps)
 	b.p.inputs = make([]int, len(knowns))
 	for k := range knowns {
 		b.p.inputs[k] = -1
@@ -124,6 +130,7 @@ func Build(graph *Graph, knowns []KnownSpec, entries []EntrySpec, source func(pr
 	}
 	b.p.slotOf = b.slotOf
 	for _, e := range entries {
+		b.p.entries = append(b.p.entries, e.Name)
 		b.p.outputs = append(b.p.outputs, b.slotOf[e.Node.ID])
 	}
 	return b.p
@@ -183,7 +190,7 @@ func (b *builder) rangeReasons(k *KnownSpec) [2]int32 {
 
 // place makes the slot of a node whose arguments have theirs.
 func (b *builder) place(n *formula.Node) {
-	s := slot{op: n.Op, node: n, known: -1}
+	s := slot{op: n.Op, known: -1}
 	wait := int32(0)
 	switch n.Op {
 	case formula.Word, formula.Items, formula.MadeOp:
@@ -366,7 +373,7 @@ func (b *builder) addConstantChecks(s *slot, l *law.Law, parameter int, n *formu
 		if x >= limits.low && x <= limits.high {
 			continue
 		}
-		b.p.slots = append(b.p.slots, slot{op: formula.Const, value: x, known: -1, node: n})
+		b.p.slots = append(b.p.slots, slot{op: formula.Const, value: x, known: -1})
 		b.p.wait = append(b.p.wait, 0)
 		b.addCheck(s, l, parameter, len(b.p.slots)-1)
 	}

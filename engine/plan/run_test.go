@@ -68,7 +68,7 @@ func TestRowByRow(t *testing.T) {
 					for i := 0; i < n; i++ {
 						want := reference[i][e]
 						if !sameBits(out.Values[e][i], want.value) || out.State(e, i) != want.state || out.Reason(e, i) != want.reason {
-							t.Fatalf("%s, row %d of %d, %d workers: %v %s %s, alone %v %s %s", p.entries[e].Name, i, n, workers,
+							t.Fatalf("%s, row %d of %d, %d workers: %v %s %s, alone %v %s %s", p.entries[e], i, n, workers,
 								out.Values[e][i], out.State(e, i), p.reasons[out.Reason(e, i)].Text, want.value, want.state, p.reasons[want.reason].Text)
 						}
 						states[want.state]++
@@ -141,7 +141,7 @@ func TestSoundBlocks(t *testing.T) {
 				one := runs(t, p, 1, 1, in[i:i+1], b[i:i+1], test.c)
 				for e := range p.entries {
 					if !sameBits(out.Values[e][i], one.Values[e][0]) || out.State(e, i) != one.State(e, 0) || (i != test.bad && one.State(e, 0) != rows.Sound) {
-						t.Fatalf("%s, %s, row %d: %v (%s), alone %v (%s)", test.name, p.entries[e].Name, i, out.Values[e][i], out.State(e, i), one.Values[e][0], one.State(e, 0))
+						t.Fatalf("%s, %s, row %d: %v (%s), alone %v (%s)", test.name, p.entries[e], i, out.Values[e][i], out.State(e, i), one.Values[e][0], one.State(e, 0))
 					}
 				}
 			}
@@ -247,7 +247,7 @@ func TestConcurrentRuns(t *testing.T) {
 				for e := range out.Values {
 					for i := 0; i < length; i++ {
 						if !sameBits(out.Values[e][i], want.Values[e][i]) || out.State(e, i) != want.State(e, i) {
-							t.Errorf("%s, row %d: %v, not %v", p.entries[e].Name, i, out.Values[e][i], want.Values[e][i])
+							t.Errorf("%s, row %d: %v, not %v", p.entries[e], i, out.Values[e][i], want.Values[e][i])
 							return
 						}
 					}

@@ -43,51 +43,51 @@ func (w *worker) quickSingles(in rows.Input) bool {
 		}
 	}
 	for _, i := range w.s.once {
-		s := &w.p.slots[i]
-		switch s.op {
-		case formula.Add:
-			w.single[i] = w.single[s.args[0]] + w.single[s.args[1]]
-			continue
-		case formula.Sub:
-			w.single[i] = w.single[s.args[0]] - w.single[s.args[1]]
-			continue
-		case formula.Mul:
-			w.single[i] = float64(w.single[s.args[0]] * w.single[s.args[1]])
-			continue
-		case formula.Div:
-			w.single[i] = w.single[s.args[0]] / w.single[s.args[1]]
-		case formula.Apply:
-			if !w.singleLaw(i, s) {
-				return false
-			}
-			continue
-		case formula.Same, formula.Entry:
-			w.single[i] = w.single[s.args[0]]
-		case formula.Guard:
-			if w.single[s.args[1]] != 1 {
-				return false
-			}
-			w.single[i] = w.single[s.args[0]]
-			continue
-		case formula.Select:
-			// Only the branch that is taken must be sound, which care finds out.
-			switch w.single[s.args[0]] {
-			case 1:
-				w.single[i] = w.single[s.args[1]]
-			case 0:
-				w.single[i] = w.single[s.args[2]]
-			default:
-				return false
-			}
-			continue
-		default:
-			w.single[i] = w.computeSingle(s)
-		}
-		if s.risk != 0 && !column.Finite(w.single[i]) {
+		if !w.quickSingle(i) {
 			return false
 		}
 	}
 	return true
+}
+
+// quickSingle computes one slot of single numbers, all that it reads being
+// sound. It gives false where the result may not be.
+func (w *worker) quickSingle(i int) bool {
+	s := &w.p.slots[i]
+	switch s.op {
+	case formula.Add:
+		w.single[i] = w.single[s.args[0]] + w.single[s.args[1]]
+		return true
+	case formula.Sub:
+		w.single[i] = w.single[s.args[0]] - w.single[s.args[1]]
+		return true
+	case formula.Mul:
+		w.single[i] = float64(w.single[s.args[0]] * w.single[s.args[1]])
+		return true
+	case formula.Div:
+		w.single[i] = w.single[s.args[0]] / w.single[s.args[1]]
+	case formula.Apply:
+		return w.singleLaw(i, s)
+	case formula.Same, formula.Entry:
+		w.single[i] = w.single[s.args[0]]
+	case formula.Guard:
+		w.single[i] = w.single[s.args[0]]
+		return w.single[s.args[1]] == 1
+	case formula.Select:
+		// Only the branch that is taken must be sound, which care finds out.
+		switch w.single[s.args[0]] {
+		case 1:
+			w.single[i] = w.single[s.args[1]]
+		case 0:
+			w.single[i] = w.single[s.args[2]]
+		default:
+			return false
+		}
+		return true
+	default:
+		w.single[i] = w.computeSingle(s)
+	}
+	return s.risk == 0 || column.Finite(w.single[i])
 }
 
 // singleLaw runs a law for single numbers.

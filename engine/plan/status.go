@@ -29,7 +29,7 @@ func (s *status) worsen(row int, state rows.State, reason int32, amount float64,
 
 // fresh gives a status of n sound rows.
 func (w *worker) fresh(n int) *status {
-	if k := len(w.spare); k > 0 {
+	if k := len(w.spare); k > 0 && cap(w.spare[k-1].state) >= n {
 		s := w.spare[k-1]
 		w.spare = w.spare[:k-1]
 		s.state, s.reason, s.amount, s.has = s.state[:n], s.reason[:n], s.amount[:n], s.has[:n]
@@ -38,10 +38,7 @@ func (w *worker) fresh(n int) *status {
 		clear(s.has)
 		return s
 	}
-	capacity := blockRows
-	s := &status{make([]rows.State, capacity), make([]int32, capacity), make([]float64, capacity), make([]bool, capacity)}
-	s.state, s.reason, s.amount, s.has = s.state[:n], s.reason[:n], s.amount[:n], s.has[:n]
-	return s
+	return &status{make([]rows.State, n), make([]int32, n), make([]float64, n), make([]bool, n)}
 }
 
 // statusOf gives a slot's status, made where there is none yet.

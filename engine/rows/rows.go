@@ -243,7 +243,29 @@ type Program interface {
 	// rows; rows already computed are then lost and the context's error is
 	// given.
 	Run(ctx context.Context, in Input, out *Outcome) error
+	// NewSession begins a session: one row whose numbers are kept.
+	NewSession(ctx context.Context) (Session, error)
 	// Close gives the program's memory back.
+	Close() error
+}
+
+// Session is one row of a program whose numbers are kept: a change computes
+// again only what depends on it. It begins with the sheet's own values, has the
+// bits, states and reasons of a run of one row, and serves one goroutine.
+type Session interface {
+	// Set gives a known an SI number, or NaN for a missing value, from the next
+	// update on.
+	Set(known int, value float64) error
+	// Update computes what depends on the knowns that were set and gives the
+	// entries whose number, state or reason changed, in no special order, the
+	// first time all of them. The slice is valid until the next update. An update that the
+	// context ends is finished by the next one.
+	Update(ctx context.Context) ([]int, error)
+	// Entry gives an entry as of the last update: its SI number (NaN where
+	// there is none), its state and its reason (0 where it is sound). Before
+	// the first update every entry waits.
+	Entry(entry int) (value float64, state State, reason int)
+	// Close gives the session's memory back.
 	Close() error
 }
 

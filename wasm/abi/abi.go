@@ -17,13 +17,16 @@ const (
 	ExportRun       = "plumbrule_run"
 	ExportReasons   = "plumbrule_reasons"
 	ExportTallies   = "plumbrule_tallies"
+	ExportSession   = "plumbrule_session"
+	ExportUpdate    = "plumbrule_update"
+	ExportEnd       = "plumbrule_end"
 	ExportFault     = "plumbrule_fault"
 	ExportClose     = "plumbrule_close"
 )
 
 // Exports lists the module's exports in the order of the document.
 func Exports() []string {
-	return []string{ExportVersion, ExportLimits, ExportReserve, ExportRelease, ExportCatalogue, ExportCompile, ExportRun, ExportReasons, ExportTallies, ExportFault, ExportClose}
+	return []string{ExportVersion, ExportLimits, ExportReserve, ExportRelease, ExportCatalogue, ExportCompile, ExportRun, ExportReasons, ExportTallies, ExportSession, ExportUpdate, ExportEnd, ExportFault, ExportClose}
 }
 
 // The limits of one module instance. What is larger is answered with a fault.
@@ -31,15 +34,16 @@ const (
 	MostBuffer   = 256 << 20 // bytes of one reserved buffer
 	MostRows     = 1 << 20   // rows of one run
 	MostPrograms = 1000      // open programs
+	MostSessions = 1000      // open sessions
 )
 
-// Code is what plumbrule_run gives.
+// Code is what plumbrule_run and plumbrule_update give.
 type Code int32
 
-// The codes of a run.
+// The codes of a run or an update.
 const (
-	Done     Code = iota // all rows are computed
-	NoSuch               // the program is not open
+	Done     Code = iota // all is computed
+	NoSuch               // the program or session is not open
 	BadInput             // the input does not fit the program or a limit
 	Failed               // a defect of the module; the instance goes on
 )
@@ -88,6 +92,28 @@ func OutputLayout(entries, rows int) Output {
 	o.Size = o.Reasons + align(4*entries*rows)
 	return o
 }
+
+// A change of a known that goes into an update: its SI number, a float64, and
+// the known's place, an unsigned 32-bit number; its size in bytes and where
+// the parts stand.
+const (
+	ChangeSize  = 16
+	ChangeKnown = 8
+)
+
+// An entry that comes out of an update: its SI number, a float64, and its
+// place, state and reason, unsigned 32-bit numbers; its size in bytes and where
+// the parts stand. The number of entries, 32 bits, stands before the first.
+const (
+	EntriesAt   = 8
+	EntrySize   = 24
+	EntryPlace  = 8
+	EntryState  = 12
+	EntryReason = 16
+)
+
+// UpdateSize gives the bytes of an update's output for a program's entries.
+func UpdateSize(entries int) int { return EntriesAt + EntrySize*entries }
 
 // Doc packs where a document stands in the module's memory.
 func Doc(pointer, length uint32) uint64 { return uint64(pointer)<<32 | uint64(length) }

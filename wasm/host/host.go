@@ -165,25 +165,36 @@ func (m *Module) Close(ctx context.Context) error {
 	return err
 }
 
-// take gives an idle instance or starts one, waiting for a free slot.
-func (m *Module) take(ctx context.Context) (*instance, error) {
+// hold waits for the right to use an instance; Close waits until it is given
+// back.
+func (m *Module) hold(ctx context.Context) error {
 	m.mu.Lock()
 	closed := m.closed
 	m.mu.Unlock()
 	if closed {
-		return nil, ErrClosed // its slots are taken for good
+		return ErrClosed // its slots are taken for good
 	}
 	select {
 	case m.slots <- struct{}{}:
 	case <-ctx.Done():
-		return nil, ctx.Err()
+		return ctx.Err()
 	}
 	m.mu.Lock()
-	if m.closed {
-		m.mu.Unlock()
+	closed = m.closed
+	m.mu.Unlock()
+	if closed {
 		<-m.slots
-		return nil, ErrClosed
+		return ErrClosed
 	}
+	return nil
+}
+
+// take gives an idle instance or starts one, waiting for a free slot.
+func (m *Module) take(ctx context.Context) (*instance, error) {
+	if err := m.hold(ctx); err != nil {
+		return nil, err
+	}
+	m.mu.Lock()
 	if n := len(m.idle); n > 0 {
 		i := m.idle[n-1]
 		m.idle = m.idle[:n-1]

@@ -14,11 +14,11 @@ func exportVersion() int32 { return abi.Version }
 
 //go:wasmexport plumbrule_limits
 func exportLimits() uint64 {
-	order := []string{"text", "line", "statements", "formula", "parts", "cells", "buffer", "rows", "programs"}
+	order := []string{"text", "line", "statements", "formula", "parts", "cells", "buffer", "rows", "programs", "sessions"}
 	return module.document(abi.AppendLimits(module.doc[:0], map[string]int{
 		"text": sheet.MostText, "line": sheet.MostLine, "statements": sheet.MostStatements,
 		"formula": formula.MostCharacters, "parts": formula.MostParts, "cells": sheet.MostCells,
-		"buffer": abi.MostBuffer, "rows": abi.MostRows, "programs": abi.MostPrograms,
+		"buffer": abi.MostBuffer, "rows": abi.MostRows, "programs": abi.MostPrograms, "sessions": abi.MostSessions,
 	}, order))
 }
 
@@ -75,6 +75,21 @@ func exportTallies(program int32) (doc uint64) {
 	}
 	return module.document(abi.AppendTallies(module.doc[:0], p.out.Tallies))
 }
+
+//go:wasmexport plumbrule_session
+func exportSession(program int32) (session int32) {
+	defer module.guard(func() { session = 0 })
+	return module.begin(program)
+}
+
+//go:wasmexport plumbrule_update
+func exportUpdate(session, changes int32, in, out uint32) (code int32) {
+	defer module.guard(func() { code = int32(abi.Failed) })
+	return int32(module.update(session, changes, in, out))
+}
+
+//go:wasmexport plumbrule_end
+func exportEnd(session int32) { delete(module.sessions, session) }
 
 //go:wasmexport plumbrule_fault
 func exportFault() uint64 { return module.document(abi.AppendFault(module.doc[:0], module.fault)) }

@@ -17,7 +17,8 @@ import (
 type instance struct {
 	buffers  map[uint32][]float64 // reserved buffers by their place
 	programs map[int32]*open
-	next     int32
+	sessions map[int32]*session
+	next     int32 // number of the last program or session
 	recent   [2]recent
 	latest   *open  // the program of the last run
 	doc      []byte // the last document; valid until the next call
@@ -39,7 +40,7 @@ type open struct {
 	out     rows.Outcome
 }
 
-var module = instance{buffers: map[uint32][]float64{}, programs: map[int32]*open{}}
+var module = instance{buffers: map[uint32][]float64{}, programs: map[int32]*open{}, sessions: map[int32]*session{}}
 
 // guard turns a panic, which is a defect, into a fault, so that the host never
 // meets a trap from the engine's own code.
@@ -105,6 +106,11 @@ func (m *instance) reserve(size int32) uint32 {
 func (m *instance) close(number int32) {
 	delete(m.programs, number)
 	m.latest = nil
+	for k, s := range m.sessions {
+		if s.program.number == number {
+			delete(m.sessions, k)
+		}
+	}
 }
 
 func (m *instance) release(place uint32) {
