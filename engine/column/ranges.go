@@ -1,23 +1,18 @@
 package column
 
-import "math"
+import (
+	"math"
+	"unsafe"
+)
 
-// AllFinite says whether no row is infinite or NaN: x - x is 0 for every
-// finite number and NaN for all others, so one sum tells.
+// AllFinite says whether no row is infinite or NaN.
 func AllFinite(a []float64) bool {
-	var s0, s1, s2, s3 float64
-	for len(a) >= 8 {
-		x := (*[8]float64)(a)
-		s0 += (x[0] - x[0]) + (x[4] - x[4])
-		s1 += (x[1] - x[1]) + (x[5] - x[5])
-		s2 += (x[2] - x[2]) + (x[6] - x[6])
-		s3 += (x[3] - x[3]) + (x[7] - x[7])
-		a = a[8:]
+	for _, x := range skipWithin(a, math.Float64bits(math.MaxFloat64)) {
+		if x-x != 0 {
+			return false
+		}
 	}
-	for _, x := range a {
-		s0 += x - x
-	}
-	return s0+s1+s2+s3 == 0
+	return true
 }
 
 // AllInside says whether every row lies from low to high, both included; NaN
@@ -28,13 +23,9 @@ func AllInside(a []float64, low, high float64) bool {
 	switch {
 	case low >= 0 && high >= low:
 		from := math.Float64bits(math.Abs(low)) // a bound of -0 is 0
-		if a = skipInside(a, from, math.Float64bits(math.Abs(high))-from, 0); len(a) == 0 {
-			return true
-		}
+		a = skipInside(a, from, math.Float64bits(math.Abs(high))-from)
 	case low == -high && high > 0:
-		if a = skipInside(a, 0, math.Float64bits(high), 1<<63); len(a) == 0 {
-			return true
-		}
+		a = skipWithin(a, math.Float64bits(high))
 	}
 	for len(a) >= 8 {
 		x := (*[8]float64)(a)
@@ -54,18 +45,75 @@ func AllInside(a []float64, low, high float64) bool {
 	return true
 }
 
-// skipInside gives the rest of a from the first eight rows of which the bits,
-// without those of clear, do not all lie within span above from.
-func skipInside(a []float64, from, span, clear uint64) []float64 {
+// skipInside gives the rest of a from the first eight rows of which the bits
+// do not all lie within span above from.
+func skipInside(a []float64, from, span uint64) []float64 {
 	for len(a) >= 8 {
-		x := (*[8]float64)(a)
-		if math.Float64bits(x[0])&^clear-from > span || math.Float64bits(x[1])&^clear-from > span ||
-			math.Float64bits(x[2])&^clear-from > span || math.Float64bits(x[3])&^clear-from > span ||
-			math.Float64bits(x[4])&^clear-from > span || math.Float64bits(x[5])&^clear-from > span ||
-			math.Float64bits(x[6])&^clear-from > span || math.Float64bits(x[7])&^clear-from > span {
+		x := bitsOf8(a)
+		if x[0]-from > span {
+			return a
+		}
+		if x[1]-from > span {
+			return a
+		}
+		if x[2]-from > span {
+			return a
+		}
+		if x[3]-from > span {
+			return a
+		}
+		if x[4]-from > span {
+			return a
+		}
+		if x[5]-from > span {
+			return a
+		}
+		if x[6]-from > span {
+			return a
+		}
+		if x[7]-from > span {
 			return a
 		}
 		a = a[8:]
 	}
 	return a
 }
+
+// skipWithin gives the rest of a from the first eight rows of which the bits
+// without the sign do not all lie within span.
+func skipWithin(a []float64, span uint64) []float64 {
+	for len(a) >= 8 {
+		x := bitsOf8(a)
+		// Twice the bits are the bits without the sign, shifted.
+		if 2*x[0] > 2*span {
+			return a
+		}
+		if 2*x[1] > 2*span {
+			return a
+		}
+		if 2*x[2] > 2*span {
+			return a
+		}
+		if 2*x[3] > 2*span {
+			return a
+		}
+		if 2*x[4] > 2*span {
+			return a
+		}
+		if 2*x[5] > 2*span {
+			return a
+		}
+		if 2*x[6] > 2*span {
+			return a
+		}
+		if 2*x[7] > 2*span {
+			return a
+		}
+		a = a[8:]
+	}
+	return a
+}
+
+// bitsOf8 gives the first eight rows as whole numbers, so that they are loaded
+// as such.
+func bitsOf8(a []float64) *[8]uint64 { return (*[8]uint64)(unsafe.Pointer((*[8]float64)(a))) }

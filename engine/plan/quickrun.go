@@ -9,18 +9,25 @@ import (
 )
 
 // quickBlock runs a block the quick way. It gives false where some row may not
-// be sound; the block is then run with care.
+// be sound; the block is then run with care. Columns are checked after they
+// were used: whoever reads them first waits for memory, and arithmetic waits
+// for less than a check does, since it can go on meanwhile.
 func (w *worker) quickBlock(in rows.Input, out *rows.Outcome, from, to int) bool {
 	n := to - from
 	for _, k := range w.s.inputs {
 		slot := w.p.inputs[k]
 		w.values[slot] = in.Values[k][from:to]
-		if w.s.quick.checked[k] && !w.knownIsSound(k, slot, n) {
+	}
+	w.out, w.from, w.compacted = out, from, 0
+	if !w.quickSteps(w.s.quick.steps, n) {
+		return false
+	}
+	for _, k := range w.s.inputs {
+		if w.s.quick.checked[k] && !w.knownIsSound(k, w.p.inputs[k], n) {
 			return false
 		}
 	}
-	w.out, w.from, w.compacted = out, from, 0
-	return w.quickSteps(w.s.quick.steps, n)
+	return true
 }
 
 // knownIsSound says whether every row of a known may be used.
@@ -151,17 +158,17 @@ func (w *worker) quickExp(s *quickStep, dst []float64) bool {
 // quickLaw runs a law inside its ranges.
 func (w *worker) quickLaw(s *quickStep, dst []float64) bool {
 	slot, root := &w.p.slots[s.slot], w.s.quick.root
+	c := &w.calls[s.slot]
+	for _, p := range c.pointers {
+		p.argument.Values = w.values[root[p.slot]]
+	}
+	slot.law.Body(dst, c.arguments, &c.work)
 	for k := range slot.checks {
 		c := &slot.checks[k]
 		if !column.AllInside(w.values[root[c.slot]], c.low, c.high) {
 			return false
 		}
 	}
-	c := &w.calls[s.slot]
-	for _, p := range c.pointers {
-		p.argument.Values = w.values[root[p.slot]]
-	}
-	slot.law.Body(dst, c.arguments, &c.work)
 	return !s.check || column.AllFinite(dst)
 }
 
