@@ -1,8 +1,10 @@
 package plan
 
 import (
+	"math"
 	"strconv"
 
+	"plumbrule/engine/column"
 	"plumbrule/engine/formula"
 	"plumbrule/engine/law"
 	"plumbrule/engine/problem"
@@ -46,11 +48,15 @@ type Program struct {
 	slotOf  []int      // by node ID; -1 where nothing needs the node
 	cost    int
 	cache   scheduleCache
+	single  oneRow
 }
 
 // slot is one step and the place of its value.
 type slot struct {
 	op        formula.Op
+	alias     bool    // the value is that of args[0]
+	risk      int32   // the reason when an operation makes no finite number of finite ones
+	a, b      int32   // the first two of args, 0 where there are fewer
 	value     float64 // of a constant
 	known     int
 	args      []int // slots
@@ -58,9 +64,7 @@ type slot struct {
 	arguments []argumentPlan
 	checks    []check
 	refusal   int32 // the reason when a law gives no number
-	risk      int32 // the reason when an operation makes no finite number of finite ones
 	guard     int32
-	alias     bool // the value is that of args[0]
 }
 
 // argumentPlan says how one argument of a law is put together.
@@ -86,7 +90,7 @@ type check struct {
 // user's text of a place, for reasons.
 func Build(graph *Graph, knowns []KnownSpec, entries []EntrySpec, source func(problem.Span) string) *Program {
 	b := &builder{
-		p:       &Program{knowns: knowns, reasons: make([]rows.Reason, 1)},
+		p:       &Program{knowns: bounded(knowns), reasons: make([]rows.Reason, 1)},
 		slotOf:  make([]int, len(graph.nodes)),
 		reasons: map[reasonKey]int32{},
 		texts:   map[string]int32{},
@@ -134,6 +138,22 @@ func Build(graph *Graph, knowns []KnownSpec, entries []EntrySpec, source func(pr
 		b.p.outputs = append(b.p.outputs, b.slotOf[e.Node.ID])
 	}
 	return b.p
+}
+
+// bounded gives the knowns with NaN for a missing value and, where a known has
+// no range, that of all numbers.
+func bounded(knowns []KnownSpec) []KnownSpec {
+	knowns = append([]KnownSpec(nil), knowns...)
+	for k := range knowns {
+		known := &knowns[k]
+		if !known.HasValue {
+			known.Value = column.NaN()
+		}
+		if !known.HasRange {
+			known.Low, known.High = -math.MaxFloat64, math.MaxFloat64
+		}
+	}
+	return knowns
 }
 
 // Reasons is the table of reasons; index 0 is empty.
@@ -218,6 +238,12 @@ func (b *builder) place(n *formula.Node) {
 			s.risk = b.text(rows.Reason{Text: words + b.inFormula(n)})
 		}
 		b.p.cost += costOf(n.Op)
+	}
+	if len(s.args) > 0 {
+		s.a = int32(s.args[0])
+	}
+	if len(s.args) > 1 {
+		s.b = int32(s.args[1])
 	}
 	b.slotOf[n.ID] = len(b.p.slots)
 	b.p.slots = append(b.p.slots, s)

@@ -34,11 +34,7 @@ func (w *worker) quickBlock(in rows.Input, out *rows.Outcome, from, to int) bool
 func (w *worker) knownIsSound(k, slot, n int) bool {
 	known := &w.p.knowns[k]
 	if known.Choices == 0 && !known.Truth {
-		low, high := -math.MaxFloat64, math.MaxFloat64
-		if known.HasRange {
-			low, high = known.Low, known.High
-		}
-		return column.AllInside(w.values[slot], low, high)
+		return column.AllInside(w.values[slot], known.Low, known.High)
 	}
 	w.checkChoice(k, slot, n)
 	return w.status[slot] == nil

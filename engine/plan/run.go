@@ -4,6 +4,7 @@ import (
 	"context"
 	"errors"
 	"strconv"
+	"strings"
 	"sync"
 	"sync/atomic"
 
@@ -23,11 +24,14 @@ type run struct {
 // Run evaluates rows into out with at most the given number of workers. The
 // numbers do not depend on how many there are, nor on the size of blocks.
 func (p *Program) Run(ctx context.Context, in rows.Input, out *rows.Outcome, workers int) error {
-	shape, err := p.shape(in)
-	if err != nil {
+	if err := ctx.Err(); err != nil {
 		return err
 	}
-	if err := ctx.Err(); err != nil {
+	if in.Rows == 1 && p.runOne(in, out) {
+		return nil
+	}
+	shape, err := p.shape(in)
+	if err != nil {
 		return err
 	}
 	out.Resize(len(p.entries), in.Rows)
@@ -144,6 +148,11 @@ func (s inputShape) column(k int) bool {
 		return s.few>>k&1 == 1
 	}
 	return s.many[k-64] == 1
+}
+
+// noColumns is the shape of an input without columns.
+func (p *Program) noColumns() inputShape {
+	return inputShape{many: strings.Repeat("\x00", max(0, len(p.knowns)-64))}
 }
 
 // shape checks the input and tells which knowns are columns.

@@ -5,7 +5,6 @@ import (
 	"errors"
 	"math"
 	"strconv"
-	"strings"
 
 	"plumbrule/engine/column"
 	"plumbrule/engine/formula"
@@ -22,6 +21,7 @@ type Session struct {
 	entry   []int32 // by slot: the entry that it is the value of, -1
 	pending pending
 	changed []int
+	one     [1]int // the slot that is computed
 	begun   bool
 	broken  bool // the context ended an update: its changes are still to be told
 }
@@ -29,7 +29,7 @@ type Session struct {
 // NewSession begins a session with the sheet's own values. Nothing is computed
 // before the first update.
 func (p *Program) NewSession() *Session {
-	s := &Session{p: p, w: p.newWorker(p.schedule(inputShape{many: strings.Repeat("\x00", max(0, len(p.knowns)-64))})), pending: newPending(len(p.slots)), entry: make([]int32, len(p.slots))}
+	s := &Session{p: p, w: p.newWorker(p.schedule(p.noColumns())), pending: newPending(len(p.slots)), entry: make([]int32, len(p.slots))}
 	s.listReaders()
 	for i := range s.entry {
 		s.entry[i] = -1
@@ -41,7 +41,7 @@ func (p *Program) NewSession() *Session {
 	}
 	for k, slot := range p.inputs {
 		if slot >= 0 {
-			s.w.singleKnown(k, slot, rows.Input{})
+			s.w.singleKnown(k, slot, nil)
 		}
 	}
 	return s
@@ -160,7 +160,7 @@ func (s *Session) refresh(slot int) bool {
 	w.status[slot] = nil
 	if of.op == formula.KnownOp {
 		w.checkKnown(of.known, slot, 1)
-	} else if !s.sound(of.args) || !w.quickSingle(slot) {
+	} else if !s.sound(of.args) || !s.quickly(slot) {
 		w.step(slot, 1)
 		s.own(slot)
 	}
@@ -169,6 +169,12 @@ func (s *Session) refresh(slot int) bool {
 		w.spare = append(w.spare, state)
 	}
 	return changed
+}
+
+// quickly computes a slot all of whose operands are sound.
+func (s *Session) quickly(slot int) bool {
+	s.one[0] = slot
+	return s.w.quickSlots(s.one[:])
 }
 
 func (s *Session) sound(slots []int) bool {

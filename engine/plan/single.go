@@ -2,37 +2,73 @@ package plan
 
 import (
 	"math"
+	"sync/atomic"
 
 	"plumbrule/engine/column"
 	"plumbrule/engine/formula"
 	"plumbrule/engine/rows"
 )
 
-// singleKnown sets a known that serves all rows and gives its number.
-func (w *worker) singleKnown(k, slot int, in rows.Input) float64 {
-	known := &w.p.knowns[k]
-	value := known.Value
-	if !known.HasValue {
-		value = math.NaN()
+// runOne evaluates a single row the quick way. It gives false where something
+// may not be sound, or the input does not fit; the row is then run with care.
+func (p *Program) runOne(in rows.Input, out *rows.Outcome) bool {
+	if len(in.Values) > len(p.knowns) {
+		return false
 	}
-	if len(in.Values) > k && len(in.Values[k]) == 1 {
-		value = in.Values[k][0]
+	if !p.single.busy.CompareAndSwap(0, 1) {
+		return false
 	}
-	w.single[slot] = value
-	return value
+	w := p.single.w
+	if w == nil {
+		w = p.newWorker(p.schedule(p.noColumns()))
+		p.single.w = w
+	}
+	if len(w.touched) > 0 {
+		w.release(0)
+	}
+	sound := w.quickSingles(in.Values)
+	if sound {
+		out.Resize(len(p.outputs), 1)
+		single, results := w.single, out.Values
+		for e, slot := range p.outputs {
+			results[e][0] = single[slot]
+		}
+	}
+	p.single.busy.Store(0)
+	return sound
+}
+
+// oneRow is the worker of runs of one row; the first to come takes it.
+type oneRow struct {
+	busy atomic.Int32
+	w    *worker
+}
+
+// singleKnown sets a known that serves all rows.
+func (w *worker) singleKnown(k, slot int, values [][]float64) {
+	w.single[slot] = w.p.knowns[k].Value // NaN where it has none
+	if len(values) > k && len(values[k]) == 1 {
+		w.single[slot] = values[k][0]
+	}
 }
 
 // quickSingles computes what no row changes as if all of it were sound. It
 // gives false where something may not be; it is then computed with care.
-func (w *worker) quickSingles(in rows.Input) bool {
-	for k := range w.p.knowns {
-		slot := w.p.inputs[k]
+func (w *worker) quickSingles(values [][]float64) bool {
+	for k, slot := range w.p.inputs {
 		if slot < 0 || w.s.vary[slot] {
 			continue
 		}
 		known := &w.p.knowns[k]
-		value := w.singleKnown(k, slot, in)
-		if !column.Finite(value) || known.HasRange && (value < known.Low || value > known.High) {
+		value := known.Value
+		if k < len(values) && len(values[k]) > 0 {
+			if len(values[k]) > 1 {
+				return false // of another length than the run
+			}
+			value = values[k][0]
+		}
+		w.single[slot] = value
+		if !(value >= known.Low && value <= known.High) {
 			return false
 		}
 		if known.Choices > 0 || known.Truth {
@@ -42,52 +78,61 @@ func (w *worker) quickSingles(in rows.Input) bool {
 			}
 		}
 	}
-	for _, i := range w.s.once {
-		if !w.quickSingle(i) {
+	return w.quickSlots(w.s.once)
+}
+
+// quickSlots computes slots of single numbers in turn, all that they read being
+// sound. It gives false where a result may not be.
+func (w *worker) quickSlots(slots []int) bool {
+	single, all := w.single, w.p.slots
+	for _, i := range slots {
+		s := &all[i]
+		switch s.op {
+		case formula.Add:
+			single[i] = single[s.a] + single[s.b]
+			continue
+		case formula.Sub:
+			single[i] = single[s.a] - single[s.b]
+			continue
+		case formula.Mul:
+			single[i] = float64(single[s.a] * single[s.b])
+			continue
+		case formula.Div:
+			single[i] = single[s.a] / single[s.b]
+		case formula.Apply:
+			if !w.singleLaw(i, s) {
+				return false
+			}
+			continue
+		case formula.Same, formula.Entry:
+			single[i] = single[s.a]
+		case formula.Guard:
+			single[i] = single[s.a]
+			if single[s.b] != 1 {
+				return false
+			}
+			continue
+		case formula.Select:
+			// Only the branch that is taken must be sound, which care finds out.
+			switch single[s.a] {
+			case 1:
+				single[i] = single[s.b]
+			case 0:
+				single[i] = single[s.args[2]]
+			default:
+				return false
+			}
+			continue
+		case formula.Exp:
+			single[i] = column.Exp(single[s.a])
+		default:
+			single[i] = w.computeSingle(s)
+		}
+		if s.risk != 0 && !column.Finite(single[i]) {
 			return false
 		}
 	}
 	return true
-}
-
-// quickSingle computes one slot of single numbers, all that it reads being
-// sound. It gives false where the result may not be.
-func (w *worker) quickSingle(i int) bool {
-	s := &w.p.slots[i]
-	switch s.op {
-	case formula.Add:
-		w.single[i] = w.single[s.args[0]] + w.single[s.args[1]]
-		return true
-	case formula.Sub:
-		w.single[i] = w.single[s.args[0]] - w.single[s.args[1]]
-		return true
-	case formula.Mul:
-		w.single[i] = float64(w.single[s.args[0]] * w.single[s.args[1]])
-		return true
-	case formula.Div:
-		w.single[i] = w.single[s.args[0]] / w.single[s.args[1]]
-	case formula.Apply:
-		return w.singleLaw(i, s)
-	case formula.Same, formula.Entry:
-		w.single[i] = w.single[s.args[0]]
-	case formula.Guard:
-		w.single[i] = w.single[s.args[0]]
-		return w.single[s.args[1]] == 1
-	case formula.Select:
-		// Only the branch that is taken must be sound, which care finds out.
-		switch w.single[s.args[0]] {
-		case 1:
-			w.single[i] = w.single[s.args[1]]
-		case 0:
-			w.single[i] = w.single[s.args[2]]
-		default:
-			return false
-		}
-		return true
-	default:
-		w.single[i] = w.computeSingle(s)
-	}
-	return s.risk == 0 || column.Finite(w.single[i])
 }
 
 // singleLaw runs a law for single numbers.
@@ -113,8 +158,6 @@ func (w *worker) computeSingle(s *slot) float64 {
 	switch s.op {
 	case formula.Neg:
 		return -a
-	case formula.Exp:
-		return column.Exp(a)
 	case formula.Ln:
 		return column.Ln(a)
 	case formula.Sqrt:

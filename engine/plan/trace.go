@@ -1,8 +1,6 @@
 package plan
 
 import (
-	"strings"
-
 	"plumbrule/engine/formula"
 	"plumbrule/engine/rows"
 )
@@ -19,7 +17,7 @@ func (p *Program) Trace(in rows.Input) (*Trace, error) {
 		return nil, err
 	}
 	// A single row has no columns.
-	w := p.newWorker(p.arrange(inputShape{many: strings.Repeat("\x00", max(0, len(p.knowns)-64))}, true))
+	w := p.newWorker(p.arrange(p.noColumns(), true))
 	w.begin(in)
 	return &Trace{w}, nil
 }

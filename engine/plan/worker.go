@@ -92,13 +92,13 @@ func (c *call) lay(a *law.Argument, plan *argumentPlan) {
 func (w *worker) begin(in rows.Input) (sound bool) {
 	w.release(0)
 	w.careful = 0
-	if w.s.quick != nil && w.quickSingles(in) {
+	if w.s.quick != nil && w.quickSingles(in.Values) {
 		return true
 	}
 	w.release(0)
 	for k := range w.p.knowns {
 		if slot := w.p.inputs[k]; slot >= 0 && !w.s.vary[slot] {
-			w.singleKnown(k, slot, in)
+			w.singleKnown(k, slot, in.Values)
 			w.checkKnown(k, slot, 1)
 		}
 	}
@@ -170,11 +170,7 @@ func (w *worker) checkKnown(k, slot, n int) {
 		w.checkChoice(k, slot, n)
 		return
 	}
-	low, high := -math.MaxFloat64, math.MaxFloat64
-	if known.HasRange {
-		low, high = known.Low, known.High
-	}
-	if column.AllInside(values, low, high) {
+	if column.AllInside(values, known.Low, known.High) {
 		return
 	}
 	for i := 0; i < n; i++ {

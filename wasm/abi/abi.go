@@ -6,28 +6,49 @@ package abi
 // Version is the version of the agreement.
 const Version = 1
 
+// Export is one of the module's functions.
+type Export int
+
 // The module's exports.
 const (
-	ExportVersion   = "plumbrule_abi"
-	ExportLimits    = "plumbrule_limits"
-	ExportReserve   = "plumbrule_reserve"
-	ExportRelease   = "plumbrule_release"
-	ExportCatalogue = "plumbrule_catalogue"
-	ExportCompile   = "plumbrule_compile"
-	ExportRun       = "plumbrule_run"
-	ExportReasons   = "plumbrule_reasons"
-	ExportTallies   = "plumbrule_tallies"
-	ExportSession   = "plumbrule_session"
-	ExportUpdate    = "plumbrule_update"
-	ExportEnd       = "plumbrule_end"
-	ExportFault     = "plumbrule_fault"
-	ExportClose     = "plumbrule_close"
+	ExportVersion Export = iota
+	ExportLimits
+	ExportReserve
+	ExportRelease
+	ExportCatalogue
+	ExportCompile
+	ExportRun
+	ExportReasons
+	ExportTallies
+	ExportSession
+	ExportUpdate
+	ExportEnd
+	ExportFault
+	ExportClose
 )
 
-// Exports lists the module's exports in the order of the document.
-func Exports() []string {
-	return []string{ExportVersion, ExportLimits, ExportReserve, ExportRelease, ExportCatalogue, ExportCompile, ExportRun, ExportReasons, ExportTallies, ExportSession, ExportUpdate, ExportEnd, ExportFault, ExportClose}
+var exportNames = [...]string{
+	ExportVersion:   "plumbrule_abi",
+	ExportLimits:    "plumbrule_limits",
+	ExportReserve:   "plumbrule_reserve",
+	ExportRelease:   "plumbrule_release",
+	ExportCatalogue: "plumbrule_catalogue",
+	ExportCompile:   "plumbrule_compile",
+	ExportRun:       "plumbrule_run",
+	ExportReasons:   "plumbrule_reasons",
+	ExportTallies:   "plumbrule_tallies",
+	ExportSession:   "plumbrule_session",
+	ExportUpdate:    "plumbrule_update",
+	ExportEnd:       "plumbrule_end",
+	ExportFault:     "plumbrule_fault",
+	ExportClose:     "plumbrule_close",
 }
+
+// String gives the name under which the module exports the function.
+func (e Export) String() string { return exportNames[e] }
+
+// Exports lists the names of the module's exports in the order of the document.
+func Exports() []string { return exportNames[:] }
 
 // The limits of one module instance. What is larger is answered with a fault.
 const (

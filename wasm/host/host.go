@@ -63,6 +63,7 @@ type Module struct {
 	mu       sync.Mutex
 	idle     []*instance
 	closed   bool
+	ended    chan struct{} // closed when the module is
 	ids      int64
 	limit    uint64
 }
@@ -87,7 +88,7 @@ func Load(ctx context.Context, code []byte, config Config) (*Module, error) {
 	if config.memory == 0 {
 		config.memory = defaultMemory
 	}
-	m := &Module{slots: make(chan struct{}, config.instances), limit: config.memory}
+	m := &Module{slots: make(chan struct{}, config.instances), ended: make(chan struct{}), limit: config.memory}
 	settings := wazero.NewRuntimeConfig().WithMemoryLimitPages(uint32(min(config.memory/pageSize, 65536)))
 	if !config.noCache {
 		cache, err := openCache(config.cache)
@@ -150,6 +151,7 @@ func (m *Module) Close(ctx context.Context) error {
 	if again {
 		return nil
 	}
+	close(m.ended)
 	for range cap(m.slots) {
 		select {
 		case m.slots <- struct{}{}:
@@ -168,23 +170,16 @@ func (m *Module) Close(ctx context.Context) error {
 // hold waits for the right to use an instance; Close waits until it is given
 // back.
 func (m *Module) hold(ctx context.Context) error {
-	m.mu.Lock()
-	closed := m.closed
-	m.mu.Unlock()
-	if closed {
-		return ErrClosed // its slots are taken for good
-	}
 	select {
 	case m.slots <- struct{}{}:
-	case <-ctx.Done():
-		return ctx.Err()
-	}
-	m.mu.Lock()
-	closed = m.closed
-	m.mu.Unlock()
-	if closed {
-		<-m.slots
-		return ErrClosed
+	default:
+		select {
+		case m.slots <- struct{}{}:
+		case <-m.ended: // the slots are taken for good
+			return ErrClosed
+		case <-ctx.Done():
+			return ctx.Err()
+		}
 	}
 	return nil
 }
@@ -195,6 +190,11 @@ func (m *Module) take(ctx context.Context) (*instance, error) {
 		return nil, err
 	}
 	m.mu.Lock()
+	if m.closed {
+		m.mu.Unlock()
+		<-m.slots
+		return nil, ErrClosed
+	}
 	if n := len(m.idle); n > 0 {
 		i := m.idle[n-1]
 		m.idle = m.idle[:n-1]

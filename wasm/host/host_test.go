@@ -230,7 +230,7 @@ func TestFaultsAreNoTraps(t *testing.T) {
 	defer m.give(ctx, i)
 	cases := []struct {
 		name      string
-		export    string
+		export    abi.Export
 		arguments []uint64
 		fault     string
 	}{

@@ -18,10 +18,11 @@ import (
 type instance struct {
 	module    api.Module
 	memory    api.Memory
-	functions map[string]api.Function
+	functions []api.Function  // by abi.Export
 	programs  map[int64]int32 // by the host's number of a program
 	in, out   buffer
 	stack     [4]uint64
+	job       run // a run that this instance does alone
 	dead      bool
 }
 
@@ -37,32 +38,32 @@ func (m *Module) start(ctx context.Context) (*instance, error) {
 	if err != nil {
 		return nil, fmt.Errorf("the module does not start: %w", err)
 	}
-	i := &instance{module: module, memory: module.Memory(), functions: map[string]api.Function{}, programs: map[int64]int32{}}
+	i := &instance{module: module, memory: module.Memory(), programs: map[int64]int32{}}
 	for _, name := range abi.Exports() {
 		f := module.ExportedFunction(name)
 		if f == nil {
 			module.Close(ctx)
 			return nil, fmt.Errorf("this is no module of Plumbrule: it does not export %s", name)
 		}
-		i.functions[name] = f
+		i.functions = append(i.functions, f)
 	}
 	return i, nil
 }
 
 // call calls an export. A trap ends the instance.
-func (i *instance) call(ctx context.Context, name string, arguments ...uint64) (uint64, error) {
+func (i *instance) call(ctx context.Context, export abi.Export, arguments ...uint64) (uint64, error) {
 	// Arguments and result share the stack; an export has at most four.
 	copy(i.stack[:], arguments)
-	if err := i.functions[name].CallWithStack(ctx, i.stack[:]); err != nil {
+	if err := i.functions[export].CallWithStack(ctx, i.stack[:]); err != nil {
 		i.dead = true
-		return 0, fmt.Errorf("the module trapped in %s, this instance is given up: %w", name, err)
+		return 0, fmt.Errorf("the module trapped in %s, this instance is given up: %w", export, err)
 	}
 	return i.stack[0], nil
 }
 
 // document calls an export that gives a document and copies it out.
-func (i *instance) document(ctx context.Context, name string, arguments ...uint64) ([]byte, error) {
-	doc, err := i.call(ctx, name, arguments...)
+func (i *instance) document(ctx context.Context, export abi.Export, arguments ...uint64) ([]byte, error) {
+	doc, err := i.call(ctx, export, arguments...)
 	if err != nil {
 		return nil, err
 	}
@@ -78,8 +79,8 @@ func (i *instance) document(ctx context.Context, name string, arguments ...uint6
 	return append([]byte(nil), view...), nil
 }
 
-func (i *instance) read(ctx context.Context, into any, name string, arguments ...uint64) error {
-	text, err := i.document(ctx, name, arguments...)
+func (i *instance) read(ctx context.Context, into any, export abi.Export, arguments ...uint64) error {
+	text, err := i.document(ctx, export, arguments...)
 	if err != nil {
 		return err
 	}
@@ -176,6 +177,7 @@ func (m *Module) Compile(ctx context.Context, text string, choices map[string][]
 		return nil, err
 	}
 	p.description = compiled.Description
+	p.rowsPerCall = rowsPerCall(&p.description)
 	m.mu.Lock()
 	m.ids++
 	p.id = m.ids

@@ -21,6 +21,7 @@ type Program struct {
 	choices     string
 	description rows.Description
 	reasons     []rows.Reason
+	rowsPerCall int
 }
 
 // Describe tells the program's knowns and entries.
@@ -58,29 +59,28 @@ const blockBytes = 4 << 20
 
 // rowsPerCall gives how many rows one call takes: enough to make the call's
 // own cost small, few enough that the deadline is looked at often.
-func (p *Program) rowsPerCall() int {
-	perRow := 8*len(p.description.Knowns) + 13*len(p.description.Entries) + 1
+func rowsPerCall(d *rows.Description) int {
+	perRow := 8*len(d.Knowns) + 13*len(d.Entries) + 1
 	return max(1024, min(blockBytes/perRow, abi.MostRows)&^1023)
 }
 
 // Run evaluates rows into out; see rows.Program. Large runs are split over the
 // pool's instances.
 func (p *Program) Run(ctx context.Context, in rows.Input, out *rows.Outcome) error {
-	shape, err := p.shape(in)
-	if err != nil {
+	if in.Rows <= p.rowsPerCall {
+		return p.runInOne(ctx, in, out)
+	}
+	return p.runInParts(ctx, in, out)
+}
+
+// runInParts splits rows over the pool's instances.
+func (p *Program) runInParts(ctx context.Context, in rows.Input, out *rows.Outcome) error {
+	step := p.rowsPerCall
+	r := &run{p: p, in: in, out: out}
+	if err := r.readShape(); err != nil {
 		return err
 	}
-	entries := len(p.description.Entries)
-	out.Resize(entries, in.Rows)
-	step := p.rowsPerCall()
-	r := &run{p: p, in: in, out: out, shape: shape}
-	if in.Rows <= step {
-		if err := r.part(ctx, 0, in.Rows); err != nil {
-			return err
-		}
-		out.Tallies = r.all.Append(out.Tallies)
-		return nil
-	}
+	out.Resize(len(p.description.Entries), in.Rows)
 	var group sync.WaitGroup
 	starts := make(chan int)
 	ctx, cancel := context.WithCancelCause(ctx)
@@ -111,24 +111,28 @@ feed:
 	return nil
 }
 
-// shape checks the input and tells how each known is passed.
-func (p *Program) shape(in rows.Input) ([]byte, error) {
-	shape := make([]byte, len(p.description.Knowns))
-	if in.Rows < 0 || len(in.Values) > len(shape) {
-		return nil, errors.New("the input has more columns than the sheet has knowns, or a negative number of rows")
+// runInOne evaluates rows that one call takes.
+func (p *Program) runInOne(ctx context.Context, in rows.Input, out *rows.Outcome) error {
+	if err := ctx.Err(); err != nil {
+		return err
 	}
-	for k, values := range in.Values {
-		switch {
-		case len(values) == 0:
-		case len(values) == 1:
-			shape[k] = abi.Single
-		case len(values) == in.Rows:
-			shape[k] = abi.Column
-		default:
-			return nil, errors.New("the column of " + p.description.Knowns[k].Name + " is not as long as the run")
-		}
+	i, err := p.module.take(ctx)
+	if err != nil {
+		return err
 	}
-	return shape, nil
+	defer p.module.give(ctx, i)
+	r := &i.job
+	r.p, r.in, r.out = p, in, out
+	if err = r.readShape(); err == nil {
+		out.Resize(len(p.description.Entries), in.Rows)
+		err = r.compute(ctx, i, 0, in.Rows)
+	}
+	if !r.all.Empty() {
+		out.Tallies = r.all.Append(out.Tallies)
+		r.all = rows.Tallies{}
+	}
+	r.in, r.out = rows.Input{}, nil
+	return err
 }
 
 // run is one evaluation that several instances share.
@@ -141,7 +145,31 @@ type run struct {
 	all   rows.Tallies
 }
 
-// part computes the rows from from to to in one instance.
+// readShape checks the input and tells how each known is passed.
+func (r *run) readShape() error {
+	knowns := r.p.description.Knowns
+	if r.in.Rows < 0 || len(r.in.Values) > len(knowns) {
+		return errors.New("the input has more columns than the sheet has knowns, or a negative number of rows")
+	}
+	r.shape = r.shape[:0]
+	for range knowns {
+		r.shape = append(r.shape, abi.Own)
+	}
+	for k, values := range r.in.Values {
+		switch {
+		case len(values) == 0:
+		case len(values) == 1:
+			r.shape[k] = abi.Single
+		case len(values) == r.in.Rows:
+			r.shape[k] = abi.Column
+		default:
+			return errors.New("the column of " + knowns[k].Name + " is not as long as the run")
+		}
+	}
+	return nil
+}
+
+// part computes the rows from from to to in an instance of the pool.
 func (r *run) part(ctx context.Context, from, to int) error {
 	if err := ctx.Err(); err != nil {
 		return err
@@ -151,6 +179,11 @@ func (r *run) part(ctx context.Context, from, to int) error {
 		return err
 	}
 	defer r.p.module.give(ctx, i)
+	return r.compute(ctx, i, from, to)
+}
+
+// compute computes the rows from from to to in one instance.
+func (r *run) compute(ctx context.Context, i *instance, from, to int) error {
 	number, ok := i.programs[r.p.id]
 	if !ok {
 		compiled, err := i.compile(ctx, r.p.text, r.p.choices)

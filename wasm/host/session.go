@@ -42,11 +42,7 @@ func (p *Program) NewSession(ctx context.Context) (rows.Session, error) {
 	for e := range s.entries {
 		s.entries[e] = entryNow{math.NaN(), rows.Waiting, 0}
 	}
-	if err := p.module.hold(ctx); err != nil {
-		return nil, err
-	}
-	defer func() { <-p.module.slots }()
-	if err := s.begin(ctx); err != nil {
+	if err := s.whileOpen(ctx, func() error { return s.begin(ctx) }); err != nil {
 		return nil, err
 	}
 	return s, nil
@@ -106,17 +102,15 @@ func (s *session) Update(ctx context.Context) ([]int, error) {
 	if s.closed {
 		return nil, errors.New("the session is closed")
 	}
-	if err := s.program.module.hold(ctx); err != nil {
-		return nil, err
-	}
-	defer func() { <-s.program.module.slots }()
-	if s.home == nil {
-		if err := s.begin(ctx); err != nil {
-			return nil, err
+	err := s.whileOpen(ctx, func() error {
+		if s.home == nil {
+			if err := s.begin(ctx); err != nil {
+				return err
+			}
 		}
-	}
-	err := s.update(ctx)
-	if err != nil && s.home.dead {
+		return s.update(ctx)
+	})
+	if err != nil && s.home != nil && s.home.dead {
 		s.home.module.Close(ctx)
 		s.home = nil
 	}
@@ -124,6 +118,22 @@ func (s *session) Update(ctx context.Context) ([]int, error) {
 		return nil, err
 	}
 	return s.changed, nil
+}
+
+// whileOpen does what needs the session's instance while the module is open
+// and as few instances run as were asked for.
+func (s *session) whileOpen(ctx context.Context, work func() error) error {
+	m := s.program.module
+	if err := m.hold(ctx); err != nil {
+		return err
+	}
+	defer func() { <-m.slots }()
+	select {
+	case <-m.ended:
+		return ErrClosed
+	default:
+		return work()
+	}
 }
 
 func (s *session) update(ctx context.Context) error {

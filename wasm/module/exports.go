@@ -24,7 +24,7 @@ func exportLimits() uint64 {
 
 //go:wasmexport plumbrule_reserve
 func exportReserve(size int32) (place uint32) {
-	defer module.guard(func() { place = 0 })
+	defer guard(&place, 0)
 	return module.reserve(size)
 }
 
@@ -33,13 +33,13 @@ func exportRelease(place uint32) { module.release(place) }
 
 //go:wasmexport plumbrule_catalogue
 func exportCatalogue() (doc uint64) {
-	defer module.guard(func() { doc = 0 })
+	defer guard(&doc, 0)
 	return module.document(abi.AppendCatalogue(module.doc[:0], functions.All()))
 }
 
 //go:wasmexport plumbrule_compile
 func exportCompile(text uint32, length int32, choices uint32, choicesLength int32) (doc uint64) {
-	defer module.guard(func() { doc = 0 })
+	defer guard(&doc, 0)
 	sheetText, choiceText := module.bytesAt(text, int(length)), module.bytesAt(choices, int(choicesLength))
 	if sheetText == nil || choiceText == nil {
 		module.fault = "the text is not in a reserved buffer"
@@ -50,13 +50,13 @@ func exportCompile(text uint32, length int32, choices uint32, choicesLength int3
 
 //go:wasmexport plumbrule_run
 func exportRun(program, rows int32, in, out uint32) (code int32) {
-	defer module.guard(func() { code = int32(abi.Failed) })
+	defer guard(&code, int32(abi.Failed))
 	return int32(module.run(program, rows, in, out))
 }
 
 //go:wasmexport plumbrule_reasons
 func exportReasons(program int32) (doc uint64) {
-	defer module.guard(func() { doc = 0 })
+	defer guard(&doc, 0)
 	p := module.programs[program]
 	if p == nil {
 		module.fault = "this program is not open"
@@ -67,7 +67,7 @@ func exportReasons(program int32) (doc uint64) {
 
 //go:wasmexport plumbrule_tallies
 func exportTallies(program int32) (doc uint64) {
-	defer module.guard(func() { doc = 0 })
+	defer guard(&doc, 0)
 	p := module.programs[program]
 	if p == nil {
 		module.fault = "this program is not open"
@@ -78,13 +78,13 @@ func exportTallies(program int32) (doc uint64) {
 
 //go:wasmexport plumbrule_session
 func exportSession(program int32) (session int32) {
-	defer module.guard(func() { session = 0 })
+	defer guard(&session, 0)
 	return module.begin(program)
 }
 
 //go:wasmexport plumbrule_update
 func exportUpdate(session, changes int32, in, out uint32) (code int32) {
-	defer module.guard(func() { code = int32(abi.Failed) })
+	defer guard(&code, int32(abi.Failed))
 	return int32(module.update(session, changes, in, out))
 }
 

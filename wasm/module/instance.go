@@ -38,21 +38,38 @@ type open struct {
 	entries int
 	in      rows.Input
 	out     rows.Outcome
+	placed  placement
+}
+
+// placement tells where in and out of a program point to. A host calls again
+// and again with the same buffers and the same shape.
+type placement struct {
+	in, out uint32
+	rows    int    // -1 where they point nowhere
+	shape   string // of the knowns
+	told    []byte // where the host writes it
+	layout  abi.Output
+	whole   []byte // the output
 }
 
 var module = instance{buffers: map[uint32][]float64{}, programs: map[int32]*open{}, sessions: map[int32]*session{}}
 
-// guard turns a panic, which is a defect, into a fault, so that the host never
-// meets a trap from the engine's own code.
-func (m *instance) guard(failed func()) {
+// guard turns a panic, which is a defect, into a fault and a failed result, so
+// that the host never meets a trap from the engine's own code.
+func guard[T any](result *T, failed T) {
 	if r := recover(); r != nil {
-		m.fault = "a defect of the module"
-		if err, ok := r.(error); ok {
-			m.fault += ": " + err.Error()
-		} else if text, ok := r.(string); ok {
-			m.fault += ": " + text
-		}
-		failed()
+		module.tell(r)
+		*result = failed
+	}
+}
+
+// tell makes a panic a fault.
+func (m *instance) tell(r any) {
+	m.fault = "a defect of the module"
+	if err, ok := r.(error); ok {
+		m.fault += ": " + err.Error()
+	} else if text, ok := r.(string); ok {
+		m.fault += ": " + text
 	}
 }
 
@@ -116,6 +133,9 @@ func (m *instance) close(number int32) {
 func (m *instance) release(place uint32) {
 	delete(m.buffers, place)
 	m.recent = [2]recent{}
+	for _, p := range m.programs {
+		p.placed = placement{rows: -1}
+	}
 }
 
 func (m *instance) compile(text, choices []byte) uint64 {
@@ -137,7 +157,7 @@ func (m *instance) compile(text, choices []byte) uint64 {
 	}
 	m.next++
 	described := program.Describe()
-	m.programs[m.next] = &open{number: m.next, program: program.(*engine.Program), knowns: len(described.Knowns), entries: len(described.Entries)}
+	m.programs[m.next] = &open{number: m.next, program: program.(*engine.Program), knowns: len(described.Knowns), entries: len(described.Entries), placed: placement{rows: -1}}
 	compiled.Program = int(m.next)
 	compiled.Description = *program.Describe()
 	return m.document(compiled.Append(m.doc[:0]))
@@ -170,39 +190,49 @@ func (m *instance) run(number, count int32, in, out uint32) abi.Code {
 		m.fault = "a run has 0 to 1048576 rows"
 		return abi.BadInput
 	}
-	n := int(count)
-	if !m.readInput(p, n, in) || !m.placeOutput(p, n, out) {
-		return abi.BadInput
+	if at := &p.placed; at.rows != int(count) || at.in != in || at.out != out || at.shape != string(at.told) {
+		if !m.place(p, int(count), in, out) {
+			return abi.BadInput
+		}
 	}
 	if err := p.program.Run(context.Background(), p.in, &p.out); err != nil {
 		m.fault = err.Error()
 		return abi.BadInput
 	}
-	m.writeStates(p, n, out)
+	p.writeStates()
 	return abi.Done
 }
 
-// readInput lets the program's input point into the host's buffer.
-func (m *instance) readInput(p *open, n int, in uint32) bool {
-	knowns := p.knowns
-	shape := m.bytesAt(in, knowns)
+// place lets a program's input and results point into the host's buffers.
+func (m *instance) place(p *open, n int, in, out uint32) bool {
+	shape := m.bytesAt(in, p.knowns)
 	if shape == nil {
 		m.fault = "the input is not a reserved buffer"
 		return false
 	}
+	p.placed = placement{rows: -1}
+	if !m.placeInput(p, n, in, shape) || !m.placeOutput(p, n, out) {
+		return false
+	}
+	p.placed.in, p.placed.out, p.placed.rows = in, out, n
+	p.placed.shape, p.placed.told = string(shape), shape
+	return true
+}
+
+func (m *instance) placeInput(p *open, n int, in uint32, shape []byte) bool {
 	if size := abi.InputSize(shape, n); m.bytesAt(in, size) == nil {
 		m.fault = "the input buffer is too small for its columns"
 		return false
 	}
-	if len(p.in.Values) != knowns {
-		p.in.Values = make([][]float64, knowns)
+	if len(p.in.Values) != p.knowns {
+		p.in.Values = make([][]float64, p.knowns)
 	}
 	p.in.Rows = n
-	if knowns == 0 {
+	if p.knowns == 0 {
 		return true
 	}
 	buffer := m.bufferAt(in)
-	at := (knowns + 7) / 8
+	at := (p.knowns + 7) / 8
 	for k, s := range shape {
 		switch s {
 		case abi.Single:
@@ -218,16 +248,16 @@ func (m *instance) readInput(p *open, n int, in uint32) bool {
 	return true
 }
 
-// placeOutput lets the program's results be written into the host's buffer.
 func (m *instance) placeOutput(p *open, n int, out uint32) bool {
-	entries := p.entries
-	layout := abi.OutputLayout(entries, n)
-	if m.bytesAt(out, layout.Size) == nil {
+	layout := abi.OutputLayout(p.entries, n)
+	whole := m.bytesAt(out, layout.Size)
+	if whole == nil {
 		m.fault = "the output buffer is too small"
 		return false
 	}
-	if len(p.out.Values) != entries {
-		p.out.Resize(entries, 0)
+	p.placed.layout, p.placed.whole = layout, whole
+	if len(p.out.Values) != p.entries {
+		p.out.Resize(p.entries, 0)
 	}
 	if layout.Size == 0 {
 		return true
@@ -239,12 +269,10 @@ func (m *instance) placeOutput(p *open, n int, out uint32) bool {
 	return true
 }
 
-func (m *instance) writeStates(p *open, n int, out uint32) {
-	entries := len(p.out.States)
-	layout := abi.OutputLayout(entries, n)
-	whole := m.bytesAt(out, layout.Size)
-	for e := 0; e < entries; e++ {
-		states := p.out.States[e]
+// writeStates writes the states and reasons of a run behind its numbers.
+func (p *open) writeStates() {
+	layout, whole, n := &p.placed.layout, p.placed.whole, p.placed.rows
+	for e, states := range p.out.States {
 		if states == nil {
 			whole[layout.Flags+e] = 0
 			continue
