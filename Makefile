@@ -51,6 +51,7 @@ check:
 
 fuzz:
 	go test ./engine/sheet -run '^$$' -fuzz FuzzParse -fuzztime 30s
+	go test ./engine/formula -run '^$$' -fuzz FuzzParse -fuzztime 30s
 	go test ./engine/unit -run '^$$' -fuzz FuzzParse -fuzztime 30s
 	go test ./cmd/plumbrule -run '^$$' -fuzz FuzzCSV -fuzztime 30s
 	go test ./cmd/plumbrule -run '^$$' -fuzz FuzzJSONLines -fuzztime 30s

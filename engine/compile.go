@@ -20,7 +20,6 @@ type compilation struct {
 	names       []string // in the order of the sheet
 	scope       *formula.Scope
 	graph       *plan.Graph
-	parser      *formula.Parser
 	knowns      []plan.KnownSpec
 	entries     []plan.EntrySpec
 	description rows.Description
@@ -49,7 +48,7 @@ type symbol struct {
 func compile(from source) (*Program, *compilation, error) {
 	c := &compilation{
 		source: from, lines: strings.Split(strings.TrimPrefix(from.text, byteOrderMark), "\n"),
-		symbols: map[string]*symbol{}, noticed: map[string]bool{}, graph: plan.NewGraph(), parser: formula.NewParser(),
+		symbols: map[string]*symbol{}, noticed: map[string]bool{}, graph: plan.NewGraph(),
 	}
 	read := sheet.Parse(from.text, &c.problems)
 	c.scope = &formula.Scope{
@@ -64,7 +63,6 @@ func compile(from source) (*Program, *compilation, error) {
 		Names:    func() []string { return append([]string(nil), c.names...) },
 		Make:     c.graph.Make,
 		Problems: &c.problems,
-		Parser:   c.parser,
 	}
 	c.description.Title = read.Title.Value
 	c.declareAll(read)
@@ -186,7 +184,7 @@ func (c *compilation) parse(text sheet.Text) *formula.Expression {
 	if !text.Present() {
 		return nil
 	}
-	return c.parser.Parse(text.Value, text, &c.problems)
+	return formula.Parse(text.Value, text, &c.problems)
 }
 
 func (c *compilation) declareKnown(s *sheet.Known) {

@@ -28,10 +28,9 @@ type literal struct {
 // knowns, so that a run computes it in columns instead of folding it away.
 func columnSheet(table []*row) string {
 	var b strings.Builder
-	parser := formula.NewParser()
 	for i, r := range table {
 		text := r.formula
-		literals := literalsOf(parser, text)
+		literals := literalsOf(text)
 		sort.Slice(literals, func(a, b int) bool { return literals[a].from > literals[b].from })
 		for k, l := range literals {
 			name := fmt.Sprintf("number_%d_%d", i, k)
@@ -45,9 +44,9 @@ func columnSheet(table []*row) string {
 
 // literalsOf finds the numbers of a formula that may vary: not exponents, and
 // not the items of lists.
-func literalsOf(parser *formula.Parser, text string) []literal {
+func literalsOf(text string) []literal {
 	var problems problem.List
-	e := parser.Parse(text, line{}, &problems)
+	e := formula.Parse(text, line{}, &problems)
 	if e == nil {
 		return nil
 	}

@@ -6,7 +6,7 @@ import (
 	"plumbrule/engine/problem"
 )
 
-// foreignWords are words that the parser would read as constructs that sheets do not have.
+// foreignWords are words of other notations for constructs that sheets do not have.
 var foreignWords = map[string]string{
 	"let":        "a sheet has no local names: derive an entry of its own instead",
 	"in":         "there is no membership test: compare with == and or",
@@ -61,20 +61,20 @@ var foreignSigns = map[string]string{
 	"\\": "write a quotient with /",
 }
 
-// operator copies an operator, or says which construct a sheet does not have.
-func (l *lifter) operator(at int, r rune) int {
+// operator reads an operator, or says which construct a sheet does not have.
+func (l *scanner) operator(at int, r rune) int {
 	two := ""
 	if at+2 <= len(l.formula) {
 		two = l.formula[at : at+2]
 	}
 	switch two {
 	case "<=", ">=", "==", "!=":
-		l.emit(two, at)
+		l.sign(two, at)
 		l.after(false, false, false)
 		return at + 2
 	case "?.":
 		if l.digitAt(at + 2) { // a choice whose first value begins with a point
-			l.emitAt("? ", at)
+			l.sign("?", at)
 			l.after(false, false, false)
 			return at + 1
 		}
@@ -88,10 +88,10 @@ func (l *lifter) operator(at int, r rune) int {
 	}
 	switch r {
 	case '+', '-', '*', '/', '^', '<', '>', '?', ':', '.':
-		l.emit(string(r), at)
+		l.sign(string(r), at)
 		l.after(false, false, false)
 	case ',':
-		l.emit(",", at)
+		l.sign(",", at)
 		l.after(false, len(l.stack) > 0 && l.stack[len(l.stack)-1].call, false)
 		l.comma = true
 	default:

@@ -19,7 +19,7 @@ func TestPlaces(t *testing.T) {
 		var problems problem.List
 		read := sheet.Parse("derive y = "+text+"\n", &problems)
 		source := read.Statements[0].(*sheet.Derive).Formula
-		p := newPlaces(source.Value, source, &lifted{})
+		p := newPlaces(source.Value, source)
 		for from := 0; from <= len(source.Value); from++ {
 			for length := 0; from+length <= len(source.Value); length++ {
 				cut := source.Value[from : from+length]
@@ -37,31 +37,8 @@ func TestPlaces(t *testing.T) {
 // A source with one place for all, as that of a law's default, keeps it.
 func TestFixedPlace(t *testing.T) {
 	at := problem.Span{Line: 3, Column: 9, Length: 4}
-	p := newPlaces("nature.g_n", fixedPlace{at}, &lifted{})
+	p := newPlaces("nature.g_n", fixedPlace{at})
 	if got := p.SpanOf(2, 3); got != at {
 		t.Error(got)
-	}
-}
-
-// Brackets in texts and in units are no brackets of the formula.
-func TestPartners(t *testing.T) {
-	const text = `f("a)", 2[J/(kg K)], (b))`
-	var problems problem.List
-	ready, ok := lift(text, fixedPlace{}, &problems)
-	if !ok {
-		t.Fatal(problems.Sorted())
-	}
-	p := newPlaces(text, fixedPlace{}, &ready)
-	for _, test := range []struct{ from, want int }{
-		{1, len(text)},
-		{strings.Index(text, "[J"), strings.Index(text, "]") + 1},
-		{strings.Index(text, "(b"), len(text) - 1},
-	} {
-		if got := p.closing(test.from); got != test.want {
-			t.Errorf("%d closes at %d, not %d", test.from, got, test.want)
-		}
-	}
-	if p.unclosed(0, len(text)) != 0 || p.unclosed(0, 3) != 1 || p.unclosed(len(text)-1, len(text)) != -1 {
-		t.Error("parentheses are counted wrongly")
 	}
 }

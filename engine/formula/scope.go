@@ -55,7 +55,6 @@ type Scope struct {
 	Names    func() []string
 	Make     Make
 	Problems *problem.List
-	Parser   *Parser
 	// defaults holds the parsed default values of laws.
 	defaults map[string]*Expression
 	// made counts the parts that formulas came to, against MostNodes; expanded
@@ -133,7 +132,7 @@ func (s *Scope) defaultOf(text string, at problem.Span) *Expression {
 	if known, ok := s.defaults[text]; ok {
 		return known
 	}
-	e := s.Parser.Parse(text, fixedPlace{at}, s.Problems)
+	e := Parse(text, fixedPlace{at}, s.Problems)
 	s.defaults[text] = e
 	return e
 }

@@ -30,7 +30,7 @@ func planned(t testing.TB, knowns string, text string, laws ...*law.Law) *Progra
 		t.Fatal(err)
 	}
 	var problems problem.List
-	graph, parser := NewGraph(), formula.NewParser()
+	graph := NewGraph()
 	symbols := map[string]formula.Symbol{}
 	number := formula.Type{Shape: formula.NumberShape}
 	var specs []KnownSpec
@@ -41,7 +41,7 @@ func planned(t testing.TB, knowns string, text string, laws ...*law.Law) *Progra
 		specs = append(specs, spec)
 	}
 	scope := &formula.Scope{
-		Catalogue: catalogue, Make: graph.Make, Problems: &problems, Parser: parser,
+		Catalogue: catalogue, Make: graph.Make, Problems: &problems,
 		Lookup: func(name string) (formula.Symbol, bool) { s, ok := symbols[name]; return s, ok },
 		Names:  func() []string { return nil },
 	}
@@ -49,7 +49,7 @@ func planned(t testing.TB, knowns string, text string, laws ...*law.Law) *Progra
 	for _, line := range strings.Split(strings.TrimSpace(text), "\n") {
 		name, body, _ := strings.Cut(line, " = ")
 		name = strings.TrimSpace(name)
-		e := parser.Parse(body, written(body), &problems)
+		e := formula.Parse(body, written(body), &problems)
 		if e == nil {
 			t.Fatalf("%s: %v", body, problems.Sorted())
 		}

@@ -15,22 +15,24 @@ type Source interface {
 	SpanOf(offset, length int) problem.Span
 }
 
-// lifted is a formula made ready for the parser: unit brackets replaced by
-// numbered ones and trailing names gathered in braces. origin tells for each
-// character of text the byte of the user's formula that it stands for.
-type lifted struct {
-	text   []rune
-	origin []int
-	units  []bracket
-	atByte map[int]int // byte offset of a unit bracket's "[" -> index in units
-}
+// tokenKind says what a token is.
+type tokenKind uint8
 
-// bracket is a unit bracket: the unit's text and the bracket's place in the
-// user's formula, in bytes, brackets included.
-type bracket struct {
-	unit           string
-	offset, length int
-	inner          int // byte offset of the unit's text
+const (
+	endToken    tokenKind = iota
+	numberToken           // value
+	nameToken             // text
+	textToken             // text, without its quotes
+	unitToken             // a unit's bracket: text is the unit's
+	signToken             // an operator, a bracket or a word like and: text
+)
+
+// token is a piece of a formula with its place in it, in bytes.
+type token struct {
+	kind     tokenKind
+	text     string
+	value    float64
+	from, to int
 }
 
 // open is a bracket that waits for its partner.
@@ -41,11 +43,13 @@ type open struct {
 	offset    int
 }
 
-type lifter struct {
+// scanner takes a formula apart. What follows a value in brackets is a unit,
+// everywhere else a bracket opens a list.
+type scanner struct {
 	formula  string
 	source   Source
 	problems *problem.List
-	out      lifted
+	tokens   []token
 	stack    []open
 	failed   bool
 	value    bool // the last token ends a value: a bracket that follows is a unit
@@ -55,11 +59,10 @@ type lifter struct {
 	comma    bool // the last token is a comma, which nothing closes behind
 }
 
-// lift makes formula text ready for the parser. It reports what cannot stand
-// in a formula and then returns false.
-func lift(formula string, source Source, problems *problem.List) (lifted, bool) {
-	l := &lifter{formula: formula, source: source, problems: problems}
-	l.out.atByte = make(map[int]int)
+// scan gives the tokens of a formula, an endToken last. It reports what cannot
+// stand in a formula and then returns false.
+func scan(formula string, source Source, problems *problem.List) ([]token, bool) {
+	l := &scanner{formula: formula, source: source, problems: problems, tokens: make([]token, 0, 1+len(formula)/3)}
 	for at := 0; at < len(formula) && !l.failed; {
 		at = l.token(at)
 	}
@@ -67,8 +70,8 @@ func lift(formula string, source Source, problems *problem.List) (lifted, bool) 
 		last := l.stack[len(l.stack)-1]
 		l.fail(last.offset, 1, problem.Syntax, "this "+quote(string(last.character))+" is not closed", "add "+quote(string(partner(last.character))))
 	}
-	l.emitAt("  ", max(0, len(formula)-1)) // the end stands apart from the last token
-	return l.out, !l.failed
+	l.add(token{kind: endToken, from: len(formula), to: len(formula)})
+	return l.tokens, !l.failed
 }
 
 func partner(r rune) rune {
@@ -83,40 +86,31 @@ func partner(r rune) rune {
 
 func quote(text string) string { return "'" + text + "'" }
 
-func (l *lifter) fail(offset, length int, code problem.Code, message, suggestion string) {
+func (l *scanner) fail(offset, length int, code problem.Code, message, suggestion string) {
 	l.failed = true
 	l.problems.Add(l.source.SpanOf(offset, length), code, message, suggestion)
 }
 
-func (l *lifter) emit(text string, origin int) {
-	for i, r := range text {
-		l.out.text = append(l.out.text, r)
-		l.out.origin = append(l.out.origin, origin+i)
-	}
-}
+func (l *scanner) add(t token) { l.tokens = append(l.tokens, t) }
 
-// emitAt writes characters that stand for one place of the user's text.
-func (l *lifter) emitAt(text string, origin int) {
-	for _, r := range text {
-		l.out.text = append(l.out.text, r)
-		l.out.origin = append(l.out.origin, origin)
-	}
+// sign adds an operator, bracket or word that stands as such in the formula.
+func (l *scanner) sign(text string, at int) {
+	l.add(token{kind: signToken, text: text, from: at, to: at + len(text)})
 }
 
 // after keeps what the last token was.
-func (l *lifter) after(value, begins, word bool) {
+func (l *scanner) after(value, begins, word bool) {
 	l.value, l.begins, l.word, l.text, l.comma = value, begins, word, false, false
 }
 
-// token copies one token and gives the offset behind it.
-func (l *lifter) token(at int) int {
+// token reads one token and gives the offset behind it.
+func (l *scanner) token(at int) int {
 	r, size := utf8.DecodeRuneInString(l.formula[at:])
 	if l.begins && !unicode.IsSpace(r) && r != ')' && l.behindNamed(at) {
 		return len(l.formula)
 	}
 	switch {
 	case unicode.IsSpace(r):
-		l.emitAt(" ", at)
 		return at + size
 	case r >= '0' && r <= '9' || r == '.' && l.digitAt(at+1):
 		return l.number(at)
@@ -125,7 +119,7 @@ func (l *lifter) token(at int) int {
 	case r == '"' || r == '\'':
 		return l.quoted(at, r)
 	case r == '(':
-		l.emit("(", at)
+		l.sign("(", at)
 		l.stack = append(l.stack, open{character: '(', call: l.word, offset: at})
 		l.after(false, l.word, false)
 		return at + 1
@@ -137,20 +131,17 @@ func (l *lifter) token(at int) int {
 	return l.operator(at, r)
 }
 
-func (l *lifter) digitAt(at int) bool {
+func (l *scanner) digitAt(at int) bool {
 	return at < len(l.formula) && l.formula[at] >= '0' && l.formula[at] <= '9'
 }
 
-// number copies a decimal number; one that a unit bracket follows is put in
-// parentheses, since the parser takes no bracket behind a bare number.
-func (l *lifter) number(at int) int {
+// number reads a decimal number.
+func (l *scanner) number(at int) int {
 	end := at
 	for l.digitAt(end) {
 		end++
 	}
-	whole := true
 	if end < len(l.formula) && l.formula[end] == '.' {
-		whole = false
 		end++
 		for l.digitAt(end) {
 			end++
@@ -162,7 +153,6 @@ func (l *lifter) number(at int) int {
 			exponent++
 		}
 		if l.digitAt(exponent) {
-			whole = false
 			for l.digitAt(exponent) {
 				exponent++
 			}
@@ -181,28 +171,15 @@ func (l *lifter) number(at int) int {
 		l.notNumber(at, stop)
 		return stop
 	}
-	text := l.formula[at:end]
-	if !l.inRange(at, end) {
-		return end
-	}
-	unitFollows := strings.HasPrefix(strings.TrimLeft(l.formula[end:], " \t\n"), "[")
-	if unitFollows {
-		l.emitAt("(", at)
-	}
-	l.emit(text, at)
-	if whole {
-		// The parser's whole numbers end at 63 bits; a formula's do not.
-		l.emitAt(".0", end-1)
-	}
-	if unitFollows {
-		l.emitAt(")", end-1)
+	if value, ok := l.inRange(at, end); ok {
+		l.add(token{kind: numberToken, value: value, from: at, to: end})
 	}
 	l.after(true, false, false)
 	return end
 }
 
 // notNumber reports what begins like a number and is none.
-func (l *lifter) notNumber(at, stop int) {
+func (l *scanner) notNumber(at, stop int) {
 	text := l.formula[at:stop]
 	if first, last, is := strings.Cut(text, ".."); is && first != "" && last != "" {
 		l.fail(at+len(first), 2, problem.Construct, "'..' is not part of a formula", foreignSigns[".."])
@@ -217,23 +194,23 @@ func (l *lifter) notNumber(at, stop int) {
 	l.fail(at, stop-at, problem.Number, quote(text)+" is not a number", advice)
 }
 
-// inRange reports a number that 64 bits cannot hold.
-func (l *lifter) inRange(at, end int) bool {
+// inRange gives a number's value; it reports one that 64 bits cannot hold.
+func (l *scanner) inRange(at, end int) (value float64, ok bool) {
 	text := l.formula[at:end]
 	value, err := strconv.ParseFloat(text, 64)
 	switch mantissa, _, _ := strings.Cut(strings.ToLower(text), "e"); {
 	case err != nil || value-value != 0:
 		l.fail(at, end-at, problem.Number, quote(text)+" is larger than any number of 64 bits", "write a magnitude below 1.8e308")
-		return false
+		return 0, false
 	case value == 0 && strings.ContainsAny(mantissa, "123456789"):
 		l.fail(at, end-at, problem.Number, quote(text)+" is smaller than any number of 64 bits", "write 0 or a magnitude above 4.9e-324")
-		return false
+		return 0, false
 	}
-	return true
+	return value, true
 }
 
 // behindNamed reports an argument by position that follows one with a name.
-func (l *lifter) behindNamed(at int) bool {
+func (l *scanner) behindNamed(at int) bool {
 	if len(l.stack) == 0 || !l.stack[len(l.stack)-1].named {
 		return false
 	}
@@ -249,7 +226,7 @@ func (l *lifter) behindNamed(at int) bool {
 }
 
 // wordEnd gives the end of the name at an offset.
-func (l *lifter) wordEnd(at int) int {
+func (l *scanner) wordEnd(at int) int {
 	for at < len(l.formula) {
 		r, size := utf8.DecodeRuneInString(l.formula[at:])
 		if r != '_' && !unicode.IsLetter(r) && !unicode.IsDigit(r) {
@@ -260,7 +237,7 @@ func (l *lifter) wordEnd(at int) int {
 	return at
 }
 
-func (l *lifter) name(at int) int {
+func (l *scanner) name(at int) int {
 	end := l.wordEnd(at)
 	word := l.formula[at:end]
 	member := at > 0 && l.formula[at-1] == '.'
@@ -272,28 +249,25 @@ func (l *lifter) name(at int) int {
 	}
 	switch word {
 	case "and", "or", "not":
-		l.emit(word, at)
+		l.sign(word, at)
 		l.after(false, false, false)
 		return end
 	}
 	rest := strings.TrimLeft(l.formula[end:], " \t\n")
 	if l.begins && strings.HasPrefix(rest, ":") && len(l.stack) > 0 {
 		top := &l.stack[len(l.stack)-1]
-		if top.call && !top.named {
-			top.named = true
-			l.emitAt("{", at)
-		}
+		top.named = top.named || top.call
 	}
-	l.emit(word, at)
+	l.add(token{kind: nameToken, text: word, from: at, to: end})
 	l.after(true, false, true)
 	return end
 }
 
-func (l *lifter) quoted(at int, mark rune) int {
+func (l *scanner) quoted(at int, mark rune) int {
 	for end := at + 1; end < len(l.formula); end++ {
 		switch l.formula[end] {
 		case byte(mark):
-			l.emit(l.formula[at:end+1], at)
+			l.add(token{kind: textToken, text: l.formula[at+1 : end], from: at, to: end + 1})
 			l.after(false, false, false)
 			l.text = true
 			return end + 1
@@ -309,14 +283,14 @@ func (l *lifter) quoted(at int, mark rune) int {
 	return len(l.formula)
 }
 
-// bracket copies a list's opening bracket, or lifts a unit bracket whole.
-func (l *lifter) bracket(at int) int {
+// bracket reads a list's opening bracket, or a unit's bracket whole.
+func (l *scanner) bracket(at int) int {
 	if l.text {
 		l.fail(at, 1, problem.Shape, "a text has no unit", "remove the bracket")
 		return len(l.formula)
 	}
 	if !l.value {
-		l.emit("[", at)
+		l.sign("[", at)
 		l.stack = append(l.stack, open{character: '[', offset: at})
 		l.after(false, false, false)
 		return at + 1
@@ -330,16 +304,14 @@ func (l *lifter) bracket(at int) int {
 		l.fail(at, end+1, problem.Construct, "a bracket after a value is its unit; "+quote(inner)+" is none", "take an item of a list with item(list, n), counted from 1")
 		return len(l.formula)
 	}
-	l.out.atByte[at] = len(l.out.units)
-	l.out.units = append(l.out.units, bracket{unit: l.formula[at+1 : at+end], offset: at, length: end + 1, inner: at + 1})
-	l.emitAt("[0]", at)
+	l.add(token{kind: unitToken, text: l.formula[at+1 : at+end], from: at, to: at + end + 1})
 	l.after(true, false, false)
 	return at + end + 1
 }
 
 // indexes says whether what stands in a bracket after a value is an index or a
 // slice of other notations, and no unit.
-func (l *lifter) indexes(inner string) bool {
+func (l *scanner) indexes(inner string) bool {
 	if strings.ContainsRune(inner, ':') {
 		return true
 	}
@@ -347,7 +319,7 @@ func (l *lifter) indexes(inner string) bool {
 	return err == nil && n != 1
 }
 
-func (l *lifter) close(at int, r rune) int {
+func (l *scanner) close(at int, r rune) int {
 	if len(l.stack) == 0 || partner(l.stack[len(l.stack)-1].character) != r {
 		l.fail(at, 1, problem.Syntax, "this "+quote(string(r))+" closes nothing", "remove it, or open it before")
 		return at + 1
@@ -356,12 +328,8 @@ func (l *lifter) close(at int, r rune) int {
 		l.fail(at, 1, problem.Syntax, quote(string(r))+" does not fit here", misfitAdvice(string(r)))
 		return at + 1
 	}
-	top := l.stack[len(l.stack)-1]
 	l.stack = l.stack[:len(l.stack)-1]
-	if top.named {
-		l.emitAt("}", at)
-	}
-	l.emit(string(r), at)
+	l.sign(string(r), at)
 	l.after(true, false, false)
 	return at + 1
 }
