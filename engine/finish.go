@@ -138,7 +138,8 @@ func (c *compilation) marginUnit(e *formula.Expression, t formula.Type) unit.Uni
 // their requirements, and gathers the cautions of the laws that are used.
 func (c *compilation) listEntries() {
 	made := c.entries
-	c.entries = nil
+	c.entries = make([]plan.EntrySpec, 0, len(made))
+	c.description.Entries = make([]rows.Entry, 0, len(made))
 	for _, s := range c.results {
 		if s.Broken || s.entry < 0 {
 			continue

@@ -218,7 +218,7 @@ func (c *checker) member(e *Expression) *Node {
 			}
 			return c.invalid(e, problem.Unknown, "there is no constant nature."+e.Field, suggestion)
 		}
-		u, err := c.unitOf(constant.Unit)
+		u, err := unit.Parse(constant.Unit)
 		if err != nil {
 			return c.invalid(e, problem.UnknownUnit, "the constant's unit "+constant.Unit+" is not known", "")
 		}

@@ -139,7 +139,7 @@ func (c *checker) accept(e, part *Expression, l *law.Law, p *law.Parameter, valu
 		}
 		return value
 	}
-	wanted, err := c.unitOf(p.Unit)
+	wanted, err := unit.Parse(p.Unit)
 	if err != nil {
 		return c.invalid(e, problem.UnknownUnit, "the law "+l.Name+" states its range in an unknown unit", "")
 	}
@@ -149,7 +149,7 @@ func (c *checker) accept(e, part *Expression, l *law.Law, p *law.Parameter, valu
 	}
 	for i := range p.Accepts {
 		conversion := &p.Accepts[i]
-		other, err := c.unitOf(conversion.Unit)
+		other, err := unit.Parse(conversion.Unit)
 		if err != nil || other.Dimension() != t.Dimension {
 			continue
 		}
@@ -287,7 +287,7 @@ func (c *checker) resultOf(e *Expression, l *law.Law, args []*Node) (Type, bool)
 			}
 		}
 	}
-	u, err := c.unitOf(l.Result.Unit)
+	u, err := unit.Parse(l.Result.Unit)
 	if err != nil {
 		c.invalid(e, problem.UnknownUnit, "the law "+l.Name+" gives its result in an unknown unit", "")
 		return Type{}, false

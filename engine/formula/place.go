@@ -14,7 +14,7 @@ type places struct {
 	length int            // bytes of the formula
 	fixed  bool           // the source has one place for all parts
 	lines  []problem.Span // the place of each line of the formula
-	of     []mark         // by byte, and one behind the last
+	of     []mark         // by byte, and one behind the last; nil where every byte is a character of one line
 }
 
 // mark is what is known of one byte of a formula.
@@ -25,8 +25,12 @@ type mark struct {
 
 // newPlaces reads a formula once.
 func newPlaces(formula string, source Source) *places {
-	p := &places{source: source, length: len(formula), of: make([]mark, len(formula)+1)}
+	p := &places{source: source, length: len(formula)}
 	p.addLines(formula)
+	if len(p.lines) == 1 && p.lines[0].Length == len(formula) {
+		return p
+	}
+	p.of = make([]mark, len(formula)+1)
 	var line, character int32
 	for at := 0; at <= len(formula); at++ {
 		p.of[at] = mark{line, character}
@@ -69,6 +73,10 @@ func (p *places) SpanOf(offset, length int) problem.Span {
 	}
 	from := min(max(offset, 0), p.length)
 	to := min(max(offset+length, from), p.length)
+	if p.of == nil {
+		span := p.lines[0]
+		return problem.Span{Line: span.Line, Column: span.Column + from, Length: to - from}
+	}
 	first, last := &p.of[from], &p.of[to]
 	span := p.lines[first.line]
 	span.Column += int(first.character)

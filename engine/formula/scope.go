@@ -62,7 +62,6 @@ type Scope struct {
 	made, expanded int
 	compared       int      // names compared for suggestions, against mostCompared
 	calls          []string // what callable lists
-	units          map[string]unitReading
 	// Used lists the laws of the catalogue that formulas call, in the order of
 	// their first call.
 	Used []*law.Law
@@ -77,24 +76,6 @@ func (s *Scope) use(l *law.Law) {
 		s.used[l] = true
 		s.Used = append(s.Used, l)
 	}
-}
-
-type unitReading struct {
-	unit unit.Unit
-	err  error
-}
-
-// unitOf reads a law's unit text, once for each text.
-func (s *Scope) unitOf(text string) (unit.Unit, error) {
-	if known, ok := s.units[text]; ok {
-		return known.unit, known.err
-	}
-	if s.units == nil {
-		s.units = map[string]unitReading{}
-	}
-	u, err := unit.Parse(text)
-	s.units[text] = unitReading{u, err}
-	return u, err
 }
 
 // Near gives the candidate that may have been meant by a word, or "". A sheet

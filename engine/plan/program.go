@@ -90,7 +90,7 @@ type check struct {
 // user's text of a place, for reasons.
 func Build(graph *Graph, knowns []KnownSpec, entries []EntrySpec, source func(problem.Span) string) *Program {
 	b := &builder{
-		p:       &Program{knowns: bounded(knowns), reasons: make([]rows.Reason, 1)},
+		p:       &Program{knowns: bounded(knowns), reasons: make([]rows.Reason, 1, 2+2*len(entries))},
 		slotOf:  make([]int, len(graph.nodes)),
 		reasons: map[reasonKey]int32{},
 		texts:   map[string]int32{},
@@ -176,14 +176,20 @@ type builder struct {
 	source  func(problem.Span) string
 }
 
+// text gives the reason with these words, added where it is new.
 func (b *builder) text(r rows.Reason) int32 {
 	if known, ok := b.texts[r.Text]; ok {
 		return known
 	}
-	b.p.reasons = append(b.p.reasons, r)
-	index := int32(len(b.p.reasons) - 1)
+	index := b.reason(r)
 	b.texts[r.Text] = index
 	return index
+}
+
+// reason adds a reason that no other part of the sheet has.
+func (b *builder) reason(r rows.Reason) int32 {
+	b.p.reasons = append(b.p.reasons, r)
+	return int32(len(b.p.reasons) - 1)
 }
 
 func (b *builder) rangeReasons(k *KnownSpec) [2]int32 {
@@ -228,8 +234,8 @@ func (b *builder) place(n *formula.Node) {
 		}
 		s.alias = n.Op == formula.Same || n.Op == formula.Entry || n.Op == formula.Guard
 		if n.Op == formula.Entry {
-			wait = b.text(rows.Reason{Text: "waits for " + n.Text, Argument: n.Text})
-			s.risk = b.text(rows.Reason{Text: "the formula of " + n.Text + " gives no finite number: its size leaves the range of numbers"})
+			wait = b.reason(rows.Reason{Text: "waits for " + n.Text, Argument: n.Text})
+			s.risk = b.reason(rows.Reason{Text: "the formula of " + n.Text + " gives no finite number: its size leaves the range of numbers"})
 		}
 		if n.Op == formula.Guard {
 			s.guard = b.text(rows.Reason{Text: n.Text})

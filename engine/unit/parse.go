@@ -3,6 +3,7 @@ package unit
 import (
 	"strconv"
 	"strings"
+	"sync"
 	"unicode/utf8"
 )
 
@@ -48,6 +49,44 @@ func (e *Error) Corrected(text string) string {
 // ^-1, ^(1/2), ^0.5, ², ⁻¹, round brackets, and the number 1. The error is an
 // *Error.
 func Parse(text string) (Unit, error) {
+	if u, known := parsed.get(text); known {
+		return u, nil
+	}
+	u, err := parse(text)
+	if err == nil {
+		parsed.keep(text, u)
+	}
+	return u, err
+}
+
+// memory keeps units that were parsed, since a sheet writes the same few again
+// and again.
+type memory struct {
+	mu     sync.RWMutex
+	byText map[string]Unit
+}
+
+// mostKept bounds how many units are kept.
+const mostKept = 1000
+
+var parsed = memory{byText: map[string]Unit{}}
+
+func (m *memory) get(text string) (Unit, bool) {
+	m.mu.RLock()
+	defer m.mu.RUnlock()
+	u, ok := m.byText[text]
+	return u, ok
+}
+
+func (m *memory) keep(text string, u Unit) {
+	m.mu.Lock()
+	defer m.mu.Unlock()
+	if len(m.byText) < mostKept {
+		m.byText[strings.Clone(text)] = u
+	}
+}
+
+func parse(text string) (Unit, error) {
 	l := shared()
 	atoms, problem := readAtoms(l, text)
 	if problem != nil {
