@@ -22,19 +22,31 @@ const (
 	expUnderflow = -745.14
 )
 
+// expNumbers are the constants of Exp. Where the machine code must build a
+// constant anew at each use, as in the module, loops load them once from here.
+var expNumbers = [...]float64{expSteps, expShift, expStepHigh, expStepLow, 0.5, 1.0 / 6, 1.0 / 24, 1.0 / 120}
+
 // expReduce writes x as n ln2/128 + r with |r| <= ln2/256 and returns n, as a
 // two's complement number in the low bits, and r with an error below 2^-61.
 func expReduce(x float64) (n uint64, r float64) {
-	shifted := float64(x*expSteps) + expShift
-	multiple := shifted - expShift
-	return math.Float64bits(shifted), (x - float64(multiple*expStepHigh)) - float64(multiple*expStepLow)
+	return expReduceBy(x, expSteps, expShift, expStepHigh, expStepLow)
+}
+
+func expReduceBy(x, steps, shift, high, low float64) (n uint64, r float64) {
+	shifted := float64(x*steps) + shift
+	multiple := shifted - shift
+	return math.Float64bits(shifted), (x - float64(multiple*high)) - float64(multiple*low)
 }
 
 // expRemainder returns exp(r) - 1 for |r| <= ln2/256 from the Taylor
 // polynomial of degree 5; the next term is below 2^-60.
 func expRemainder(r float64) float64 {
+	return expRemainderBy(r, 0.5, 1.0/6, 1.0/24, 1.0/120)
+}
+
+func expRemainderBy(r, c2, c3, c4, c5 float64) float64 {
 	square := float64(r * r)
-	return r + float64(square*((0.5+float64(r*(1.0/6)))+float64(square*(1.0/24+float64(r*(1.0/120))))))
+	return r + float64(square*((c2+float64(r*c3))+float64(square*(c4+float64(r*c5)))))
 }
 
 // expAssemble returns 2^(n/128) (1+remainder) where the result is normal.
@@ -66,18 +78,28 @@ func ExpScaledColumn(dst, src []float64, scale float64) (usual bool) {
 	n := min(len(dst), len(src))
 	dst, src = dst[:n], src[:n]
 	usual = true
+	var steps, shift, high, low, c2, c3, c4, c5 float64 = expSteps, expShift, expStepHigh, expStepLow, 0.5, 1.0 / 6, 1.0 / 24, 1.0 / 120
+	if inModule {
+		k := &expNumbers
+		steps, shift, high, low, c2, c3, c4, c5 = k[0], k[1], k[2], k[3], k[4], k[5], k[6], k[7]
+	}
+	const sign = 1 << 63
+	limit := math.Float64bits(expUsual)
 	for len(dst) >= 4 && len(src) >= 4 {
 		d, s := (*[4]float64)(dst), (*[4]float64)(src)
 		x0, x1, x2, x3 := s[0], s[1], s[2], s[3]
-		if math.Abs(x0) <= expUsual && math.Abs(x1) <= expUsual && math.Abs(x2) <= expUsual && math.Abs(x3) <= expUsual {
-			n0, r0 := expReduce(x0)
-			n1, r1 := expReduce(x1)
-			n2, r2 := expReduce(x2)
-			n3, r3 := expReduce(x3)
-			d[0] = float64(scale * expAssemble(n0, expRemainder(r0)))
-			d[1] = float64(scale * expAssemble(n1, expRemainder(r1)))
-			d[2] = float64(scale * expAssemble(n2, expRemainder(r2)))
-			d[3] = float64(scale * expAssemble(n3, expRemainder(r3)))
+		// The sign bit of a difference tells a size above the limit.
+		far := (limit - math.Float64bits(x0)&^sign) | (limit - math.Float64bits(x1)&^sign) |
+			(limit - math.Float64bits(x2)&^sign) | (limit - math.Float64bits(x3)&^sign)
+		if int64(far) >= 0 {
+			n0, r0 := expReduceBy(x0, steps, shift, high, low)
+			n1, r1 := expReduceBy(x1, steps, shift, high, low)
+			n2, r2 := expReduceBy(x2, steps, shift, high, low)
+			n3, r3 := expReduceBy(x3, steps, shift, high, low)
+			d[0] = float64(scale * expAssemble(n0, expRemainderBy(r0, c2, c3, c4, c5)))
+			d[1] = float64(scale * expAssemble(n1, expRemainderBy(r1, c2, c3, c4, c5)))
+			d[2] = float64(scale * expAssemble(n2, expRemainderBy(r2, c2, c3, c4, c5)))
+			d[3] = float64(scale * expAssemble(n3, expRemainderBy(r3, c2, c3, c4, c5)))
 		} else {
 			usual = false
 			d[0], d[1], d[2], d[3] = float64(scale*Exp(x0)), float64(scale*Exp(x1)), float64(scale*Exp(x2)), float64(scale*Exp(x3))

@@ -46,8 +46,11 @@ func AllInside(a []float64, low, high float64) bool {
 }
 
 // skipInside gives the rest of a from the first eight rows of which the bits
-// do not all lie within span above from.
+// do not all lie within span above from; both lie below the sign bit.
 func skipInside(a []float64, from, span uint64) []float64 {
+	if inModule {
+		return skipInsideJoined(a, from, span)
+	}
 	for len(a) >= 8 {
 		x := bitsOf8(a)
 		if x[0]-from > span {
@@ -79,9 +82,35 @@ func skipInside(a []float64, from, span uint64) []float64 {
 	return a
 }
 
+// skipInsideJoined is skipInside by the sign bits of differences: a number
+// without a sign below from or above high sets that of one, one with a sign
+// that of the other.
+func skipInsideJoined(a []float64, from, span uint64) []float64 {
+	high := from + span
+	for len(a) >= 8 {
+		x := bitsOf8(a)
+		outside := (x[0] - from) | (high - x[0]) |
+			(x[1] - from) | (high - x[1]) |
+			(x[2] - from) | (high - x[2]) |
+			(x[3] - from) | (high - x[3]) |
+			(x[4] - from) | (high - x[4]) |
+			(x[5] - from) | (high - x[5]) |
+			(x[6] - from) | (high - x[6]) |
+			(x[7] - from) | (high - x[7])
+		if int64(outside) < 0 {
+			return a
+		}
+		a = a[8:]
+	}
+	return a
+}
+
 // skipWithin gives the rest of a from the first eight rows of which the bits
 // without the sign do not all lie within span.
 func skipWithin(a []float64, span uint64) []float64 {
+	if inModule {
+		return skipWithinJoined(a, span)
+	}
 	for len(a) >= 8 {
 		x := bitsOf8(a)
 		// Twice the bits are the bits without the sign, shifted.
@@ -107,6 +136,27 @@ func skipWithin(a []float64, span uint64) []float64 {
 			return a
 		}
 		if 2*x[7] > 2*span {
+			return a
+		}
+		a = a[8:]
+	}
+	return a
+}
+
+// skipWithinJoined is skipWithin by the sign bits of differences.
+func skipWithinJoined(a []float64, span uint64) []float64 {
+	const sign = 1 << 63
+	for len(a) >= 8 {
+		x := bitsOf8(a)
+		outside := (span - x[0]&^sign) |
+			(span - x[1]&^sign) |
+			(span - x[2]&^sign) |
+			(span - x[3]&^sign) |
+			(span - x[4]&^sign) |
+			(span - x[5]&^sign) |
+			(span - x[6]&^sign) |
+			(span - x[7]&^sign)
+		if int64(outside) < 0 {
 			return a
 		}
 		a = a[8:]

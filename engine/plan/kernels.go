@@ -26,17 +26,11 @@ func compute(op formula.Op, dst, a, b, c []float64) {
 			column.Map2(dst, a, b, column.Pow)
 		}
 	case formula.Neg:
-		for i := range dst {
-			dst[i] = -a[i]
-		}
+		column.NegColumn(dst, a)
 	case formula.Sqrt:
-		for i := range dst {
-			dst[i] = math.Sqrt(a[i])
-		}
+		column.SqrtColumn(dst, a)
 	case formula.Abs:
-		for i := range dst {
-			dst[i] = math.Abs(a[i])
-		}
+		column.AbsColumn(dst, a)
 	case formula.Exp:
 		column.ExpColumn(dst, a)
 	case formula.Ln:
@@ -72,9 +66,7 @@ func compute(op formula.Op, dst, a, b, c []float64) {
 	case formula.Sign:
 		column.Map1(dst, a, column.SignOf)
 	case formula.Not:
-		for i := range dst {
-			dst[i] = 1 - a[i]
-		}
+		column.NotColumn(dst, a)
 	case formula.Atan2:
 		column.Map2(dst, a, b, column.Atan2)
 	case formula.Hypot:
@@ -84,27 +76,16 @@ func compute(op formula.Op, dst, a, b, c []float64) {
 	case formula.Max:
 		column.Map2(dst, a, b, column.Max)
 	case formula.Less:
-		column.Map2(dst, a, b, func(x, y float64) float64 { return condition(x < y, x, y) })
+		column.LessColumn(dst, a, b)
 	case formula.LessEqual:
-		column.Map2(dst, a, b, func(x, y float64) float64 { return condition(x <= y, x, y) })
+		column.LessEqualColumn(dst, a, b)
 	case formula.Equal:
-		column.Map2(dst, a, b, func(x, y float64) float64 { return condition(x == y, x, y) })
+		column.EqualColumn(dst, a, b)
 	case formula.NotEqual:
-		column.Map2(dst, a, b, func(x, y float64) float64 { return condition(x != y, x, y) })
+		column.NotEqualColumn(dst, a, b)
 	case formula.Select:
 		selectColumn(dst, a, b, c)
 	}
-}
-
-// condition gives a comparison's truth, NaN where an operand is no number.
-func condition(holds bool, x, y float64) float64 {
-	if x != x || y != y {
-		return math.NaN()
-	}
-	if holds {
-		return 1
-	}
-	return 0
 }
 
 // selectColumn takes each row from one of two columns.

@@ -25,6 +25,9 @@ type KnownSpec struct {
 	Truth    bool
 }
 
+// listed says whether only certain whole numbers stand for a value.
+func (k *KnownSpec) listed() bool { return k.Choices > 0 || k.Truth }
+
 // EntrySpec is a result: its name, its finished node (formula.Entry, or a
 // constant) and its role.
 type EntrySpec struct {

@@ -17,13 +17,16 @@ func (w *worker) quickBlock(in rows.Input, out *rows.Outcome, from, to int) bool
 	for _, k := range w.s.inputs {
 		slot := w.p.inputs[k]
 		w.values[slot] = in.Values[k][from:to]
+		if w.p.knowns[k].listed() && !w.knownIsSound(k, slot, n) {
+			return false // choices are taken by such numbers
+		}
 	}
 	w.out, w.from, w.compacted = out, from, 0
 	if !w.quickSteps(w.s.quick.steps, n) {
 		return false
 	}
 	for _, k := range w.s.inputs {
-		if w.s.quick.checked[k] && !w.knownIsSound(k, w.p.inputs[k], n) {
+		if w.s.quick.checked[k] && !w.p.knowns[k].listed() && !w.knownIsSound(k, w.p.inputs[k], n) {
 			return false
 		}
 	}
@@ -33,7 +36,7 @@ func (w *worker) quickBlock(in rows.Input, out *rows.Outcome, from, to int) bool
 // knownIsSound says whether every row of a known may be used.
 func (w *worker) knownIsSound(k, slot, n int) bool {
 	known := &w.p.knowns[k]
-	if known.Choices == 0 && !known.Truth {
+	if !known.listed() {
 		return column.AllInside(w.values[slot], known.Low, known.High)
 	}
 	w.checkChoice(k, slot, n)
@@ -172,15 +175,9 @@ func (w *worker) quickLaw(s *quickStep, dst []float64) bool {
 func (w *worker) quickChoose(s *quickStep, n int) bool {
 	ch := s.choose
 	condition := w.values[ch.condition]
-	taken := 0
-	for _, c := range condition {
-		switch c {
-		case 1:
-			taken++
-		case 0:
-		default:
-			return false
-		}
+	taken, all := column.Trues(condition)
+	if !all {
+		return false
 	}
 	if taken == 0 || taken == n {
 		b := &ch.yes

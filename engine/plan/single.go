@@ -71,7 +71,7 @@ func (w *worker) quickSingles(values [][]float64) bool {
 		if !(value >= known.Low && value <= known.High) {
 			return false
 		}
-		if known.Choices > 0 || known.Truth {
+		if known.listed() {
 			w.checkChoice(k, slot, 1)
 			if w.status[slot] != nil {
 				return false

@@ -166,7 +166,7 @@ func (w *worker) carefulBlock(in rows.Input, out *rows.Outcome, from, to int) {
 func (w *worker) checkKnown(k, slot, n int) {
 	known := &w.p.knowns[k]
 	values := w.values[slot]
-	if known.Choices > 0 || known.Truth {
+	if known.listed() {
 		w.checkChoice(k, slot, n)
 		return
 	}

@@ -79,19 +79,21 @@ const (
 
 // seaDepthBody takes sea pressure and latitude.
 func seaDepthBody(dst []float64, arguments []law.Argument, _ *law.Work) {
-	pressure, latitude := &arguments[0], &arguments[1]
-	gravity := newSeaGravity(latitude)
+	pressures := arguments[0].Values
+	step := column.Stride(pressures)
+	gravity := newSeaGravity(&arguments[1])
 	for i := range dst {
-		dst[i] = seaDepth(pressure.At(i)/pascalsPerDecibar, gravity.at(i))
+		dst[i] = seaDepth(pressures[i*step]/pascalsPerDecibar, gravity.at(i))
 	}
 }
 
 // seaPressureBody takes depth and latitude.
 func seaPressureBody(dst []float64, arguments []law.Argument, _ *law.Work) {
-	depth, latitude := &arguments[0], &arguments[1]
-	gravity := newSeaGravity(latitude)
+	depths := arguments[0].Values
+	step := column.Stride(depths)
+	gravity := newSeaGravity(&arguments[1])
 	for i := range dst {
-		dst[i] = pascalsPerDecibar * seaPressure(depth.At(i), gravity.at(i))
+		dst[i] = pascalsPerDecibar * seaPressure(depths[i*step], gravity.at(i))
 	}
 }
 
@@ -114,12 +116,16 @@ func seaPressure(depth, gravity float64) float64 {
 	p += float64(float64(p*p) * (gravityRise/gravity - volume2/volume1))
 	pull := volume1 - float64(gravityRise*depth)
 	weight := float64(depth * gravity)
-	for range 3 {
-		value := float64((float64((float64((float64(volume4*p)+volume3)*p)+volume2)*p)+pull)*p) - weight
-		slope := float64((float64((float64(4*volume4*p)+3*volume3)*p)+2*volume2)*p) + pull
-		p -= value / slope
-	}
-	return p
+	p = nearerSeaPressure(p, pull, weight)
+	p = nearerSeaPressure(p, pull, weight)
+	return nearerSeaPressure(p, pull, weight)
+}
+
+// nearerSeaPressure is one step of Newton's method.
+func nearerSeaPressure(p, pull, weight float64) float64 {
+	value := float64((float64((float64((float64(volume4*p)+volume3)*p)+volume2)*p)+pull)*p) - weight
+	slope := float64((float64((float64(4*volume4*p)+3*volume3)*p)+2*volume2)*p) + pull
+	return p - value/slope
 }
 
 // seaGravity gives gravity at the sea's surface row by row, computed once where
@@ -143,8 +149,13 @@ func (g *seaGravity) at(row int) float64 {
 	if g.constant != 0 {
 		return g.constant
 	}
-	return surfaceGravity(g.latitude.At(row))
+	return g.varying(row)
 }
+
+// varying is kept apart from at, which so is no call where the latitude is one.
+//
+//go:noinline
+func (g *seaGravity) varying(row int) float64 { return surfaceGravity(g.latitude.At(row)) }
 
 // surfaceGravity gives gravity at sea level in m/s^2 from the latitude in rad,
 // as UNESCO 44 takes it: the Geodetic Reference System 1967 (Anon. (1970)
