@@ -51,8 +51,8 @@ func TestCatalogue(t *testing.T) {
 		if strings.HasSuffix(l.Gives, ".") {
 			wrong("a full stop ends what it gives")
 		}
-		if (l.Body == nil) != (l.Result.Type == law.Made) {
-			wrong("a law that makes a value has no body, every other has one")
+		if (l.Body != nil) != (l.Result.Type == law.Number) {
+			wrong("a law that gives a number has a body, no other has one")
 		}
 		if l.Result.Type != law.Made && len(l.Examples) == 0 {
 			wrong("there is no example")
@@ -93,8 +93,10 @@ func checkResult(t *testing.T, l *law.Law) {
 			}
 		}
 		t.Errorf("%s: no parameter %s, as which the result would be", l.Name, l.Result.SameAs)
-	case l.Result.Type != law.Number:
-		t.Errorf("%s: the result is neither a number nor made", l.Name)
+	case l.Result.Type == law.List && (l.Result.Each == nil || l.Result.Each.Count == nil || l.Result.Each.Shared == nil || l.Result.Each.Item == nil):
+		t.Errorf("%s: how the items are worked out is not told", l.Name)
+	case l.Result.Type == law.Text:
+		t.Errorf("%s: the result is a text", l.Name)
 	default:
 		if _, err := unit.Parse(l.Result.Unit); err != nil {
 			t.Errorf("%s: the result's unit: %v", l.Name, err)

@@ -6,7 +6,9 @@ import (
 	"strings"
 
 	"plumbrule/engine/formula"
+	"plumbrule/engine/law"
 	"plumbrule/engine/problem"
+	"plumbrule/functions"
 )
 
 // line is a formula that stands alone on one line.
@@ -42,8 +44,8 @@ func columnSheet(table []*row) string {
 	return b.String()
 }
 
-// literalsOf finds the numbers of a formula that may vary: not exponents, and
-// not the items of lists.
+// literalsOf finds the numbers of a formula that may vary: not exponents,
+// not the items of lists, and not what a list's length hangs on.
 func literalsOf(text string) []literal {
 	var problems problem.List
 	e := formula.Parse(text, line{}, &problems)
@@ -74,6 +76,9 @@ func literalsOf(text string) []literal {
 		}
 		for _, part := range e.Parts {
 			visit(part)
+		}
+		if l := functions.All().Law(e.Word); e.Form == formula.Call && l != nil && l.Result.Type == law.List {
+			return // its options tell how many items there are
 		}
 		for _, option := range e.Options {
 			visit(option.Value)

@@ -200,6 +200,10 @@ func lawResult(l *law.Law) string {
 	switch {
 	case l.Result.Type == law.Made:
 		return "a " + l.Result.Made
+	case l.Result.Type == law.List && shownUnit(l.Result.Unit) == "":
+		return "a list of pure numbers"
+	case l.Result.Type == law.List:
+		return "a list in " + l.Result.Unit
 	case l.Result.SameAs != "":
 		return "in the unit of " + l.Result.SameAs
 	case shownUnit(l.Result.Unit) == "":

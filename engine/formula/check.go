@@ -306,32 +306,17 @@ func (c *checker) retype(n *Node, t Type) *Node {
 	return c.Make(Node{Op: Same, Args: []*Node{n}, Type: t, Place: n.Place})
 }
 
-// mapList applies f to every item of a list.
-func (c *checker) mapList(e *Expression, list *Node, f func(*Node) *Node, item Type) *Node {
-	t := Type{Shape: ListShape, Dimension: item.Dimension, Kind: item.Kind, Length: list.Length()}
-	if list.Numbers != nil {
-		numbers := make([]float64, len(list.Numbers))
-		for i, x := range list.Numbers {
-			result := f(c.number(e, x, Type{Shape: NumberShape, Dimension: list.Type.Dimension, Kind: list.Type.Kind}))
-			if !result.IsConst() {
-				return c.mapItems(e, c.spread(e, list), f, t)
-			}
-			numbers[i] = result.Value
-		}
-		return c.node(e, Node{Op: Items, Numbers: numbers, Type: t})
-	}
-	return c.mapItems(e, list.Args, f, t)
-}
-
-func (c *checker) mapItems(e *Expression, items []*Node, f func(*Node) *Node, t Type) *Node {
-	args := make([]*Node, len(items))
-	for i, item := range items {
-		args[i] = f(item)
-		if args[i].Type.Shape == Invalid {
+// mapList applies f, which gives values of type t, to every item of a list.
+func (c *checker) mapList(e *Expression, list *Node, f func(*Node) *Node, t Type) *Node {
+	items := make([]*Node, 0, list.Length())
+	for _, item := range c.spread(e, list) {
+		mapped := f(item)
+		if mapped.Type.Shape == Invalid {
 			return invalidNode
 		}
+		items = append(items, mapped)
 	}
-	return c.node(e, Node{Op: Items, Args: args, Type: t})
+	return c.listOf(e, items, t)
 }
 
 // spread gives the items of a list as nodes.
@@ -352,7 +337,7 @@ func (c *checker) list(e *Expression) *Node {
 		return c.invalid(e, problem.Shape, "a list has at least one item", "")
 	}
 	items := make([]*Node, len(e.Parts))
-	broken, constant := false, true
+	broken := false
 	var t Type
 	for i, part := range e.Parts {
 		items[i] = c.check(part)
@@ -366,7 +351,6 @@ func (c *checker) list(e *Expression) *Node {
 			broken = true
 			continue
 		}
-		constant = constant && items[i].IsConst()
 		if t.Shape == Invalid {
 			t = item
 			continue
@@ -386,13 +370,20 @@ func (c *checker) list(e *Expression) *Node {
 	if broken {
 		return invalidNode
 	}
-	result := Type{Shape: ListShape, Dimension: t.Dimension, Kind: t.Kind, Length: len(items)}
-	if constant {
-		numbers := make([]float64, len(items))
-		for i, item := range items {
-			numbers[i] = item.Value
+	return c.listOf(e, items, t)
+}
+
+// listOf makes a list of items of one type.
+func (c *checker) listOf(e *Expression, items []*Node, item Type) *Node {
+	t := Type{Shape: ListShape, Dimension: item.Dimension, Kind: item.Kind, Length: len(items)}
+	numbers := make([]float64, 0, len(items))
+	for _, item := range items {
+		if item.IsConst() {
+			numbers = append(numbers, item.Value)
 		}
-		return c.node(e, Node{Op: Items, Numbers: numbers, Type: result})
 	}
-	return c.node(e, Node{Op: Items, Args: items, Type: result})
+	if len(items) > 0 && len(numbers) == len(items) {
+		return c.node(e, Node{Op: Items, Numbers: numbers, Type: t})
+	}
+	return c.node(e, Node{Op: Items, Args: items, Type: t})
 }

@@ -46,6 +46,9 @@ func (c *checker) lawCall(e *Expression, l *law.Law) *Node {
 	if !ok {
 		return invalidNode
 	}
+	if l.Result.Type == law.List {
+		return c.lawList(e, l, args, result)
+	}
 	return c.applyForChoices(e, l, args, result)
 }
 

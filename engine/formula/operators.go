@@ -89,24 +89,13 @@ func (c *checker) elementwise(e *Expression, left, right *Node) *Node {
 	}
 	items := make([]*Node, n)
 	lefts, rights := c.operands(e, left, n), c.operands(e, right, n)
-	constant := true
 	for i := range items {
 		items[i] = c.arithmetic(e, lefts[i], rights[i])
 		if items[i].Type.Shape == Invalid {
 			return invalidNode
 		}
-		constant = constant && items[i].IsConst()
 	}
-	t := items[0].Type
-	t.Shape, t.Length = ListShape, n
-	if constant {
-		numbers := make([]float64, n)
-		for i := range items {
-			numbers[i] = items[i].Value
-		}
-		return c.node(e, Node{Op: Items, Numbers: numbers, Type: t})
-	}
-	return c.node(e, Node{Op: Items, Args: items, Type: t})
+	return c.listOf(e, items, items[0].Type)
 }
 
 func (c *checker) operands(e *Expression, value *Node, n int) []*Node {

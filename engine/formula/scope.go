@@ -64,8 +64,9 @@ type Scope struct {
 	calls          []string // what callable lists
 	// Used lists the laws of the catalogue that formulas call, in the order of
 	// their first call.
-	Used []*law.Law
-	used map[*law.Law]bool
+	Used  []*law.Law
+	used  map[*law.Law]bool
+	parts map[*law.Law]listParts
 }
 
 func (s *Scope) use(l *law.Law) {

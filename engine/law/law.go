@@ -66,6 +66,23 @@ type Result struct {
 	// SameAs names the parameter whose kind (and dimension) the result takes
 	// on, as with a law that only scales; empty for a result of its own.
 	SameAs string
+	// Each tells, for Type List, how the items are worked out.
+	Each *Each
+}
+
+// Each tells how the items of a list-valued law are worked out. A call is laid
+// out as one number an item before the first row.
+type Each struct {
+	// Count gives how many items a call has, or says why that cannot be told.
+	// Of the arguments it gets what is known before the first row: a number
+	// that is not known has no values.
+	Count func(arguments []Argument) (items int, wrong string)
+	// Shared works out, once for all items, a number that each of them needs,
+	// from the call's arguments.
+	Shared Body
+	// Item works out one item from the call's arguments, the item's number
+	// counted from 0, and what Shared gave.
+	Item Body
 }
 
 // Example is a call and what it gives, with as many digits as are right:

@@ -152,7 +152,7 @@ func fixed(n *formula.Node) bool {
 func applyOnce(n *formula.Node) (float64, bool) {
 	arguments := make([]law.Argument, len(n.Args))
 	for i, a := range n.Args {
-		arguments[i] = constantArgument(a)
+		arguments[i] = formula.Known(a)
 		if i < len(n.Law.Parameters) && !insideRanges(&arguments[i], boundsOf(&n.Law.Parameters[i])) {
 			return 0, false
 		}
@@ -174,43 +174,12 @@ func insideMade(n *formula.Node) bool {
 		return true
 	}
 	for i, a := range n.Args {
-		argument := constantArgument(a)
+		argument := formula.Known(a)
 		if !insideRanges(&argument, boundsOf(&n.Law.Parameters[i])) || !insideMade(a) {
 			return false
 		}
 	}
 	return true
-}
-
-func constantArgument(n *formula.Node) law.Argument {
-	switch n.Op {
-	case formula.Word:
-		return law.Argument{Text: n.Text}
-	case formula.MadeOp:
-		a := law.Argument{Maker: n.Law, Items: make([]law.Argument, len(n.Args))}
-		for i, part := range n.Args {
-			a.Items[i] = constantArgument(part)
-		}
-		return a
-	case formula.Items:
-		if n.Numbers != nil {
-			return law.Argument{Items: numbersAsItems(n.Numbers)}
-		}
-		a := law.Argument{Items: make([]law.Argument, len(n.Args))}
-		for i, part := range n.Args {
-			a.Items[i] = constantArgument(part)
-		}
-		return a
-	}
-	return law.Argument{Values: []float64{n.Value}}
-}
-
-func numbersAsItems(numbers []float64) []law.Argument {
-	items := make([]law.Argument, len(numbers))
-	for i := range numbers {
-		items[i].Values = numbers[i : i+1 : i+1]
-	}
-	return items
 }
 
 func insideRanges(a *law.Argument, b bounds) bool {

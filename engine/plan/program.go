@@ -326,7 +326,7 @@ func (b *builder) argument(n *formula.Node) argumentPlan {
 		return argumentPlan{slot: -1, text: n.Text}
 	case formula.Items, formula.MadeOp:
 		if n.Numbers != nil {
-			return argumentPlan{slot: -1, fixed: numbersAsItems(n.Numbers)}
+			return argumentPlan{slot: -1, fixed: formula.NumbersAsItems(n.Numbers)}
 		}
 		a := argumentPlan{slot: -1, items: make([]argumentPlan, len(n.Args))}
 		if n.Op == formula.MadeOp {

@@ -38,6 +38,7 @@ func Laws() []*law.Law {
 		shiftLaw,
 		partitionSumLaw,
 		occupancyLaw,
+		occupanciesLaw,
 		meanEnergyLaw,
 		heatCapacityLaw,
 		entropyLaw,

@@ -157,7 +157,6 @@ func (s *scratch) listedOccupancy(mode, n *law.Argument, dst []float64) {
 			continue
 		}
 		at := int(level)
-		x := float64((energies[at].At(row) - s.lowest[row]) * s.beta[row])
-		dst[row] = float64(degeneracies[at].At(row)*column.Exp(-x)) / s.value[row]
+		dst[row] = s.listedShare(&energies[at], &degeneracies[at], row, s.value[row])
 	}
 }

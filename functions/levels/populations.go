@@ -72,39 +72,53 @@ func occupancy(dst []float64, arguments []law.Argument, work *law.Work) {
 	switch {
 	case mode.Maker == ladderLaw && len(mode.Items) >= 2:
 		s.listedOccupancy(mode, n, dst)
-	case mode.Maker == oscillatorLaw && len(mode.Items) == 1:
-		for i := range dst {
-			dst[i] = oscillatorOccupancy(mode.Items[0].At(i)*s.beta[i], n.At(i))
-		}
-	case isStiffRotor(mode):
-		for i := range dst {
-			dst[i] = rotorOccupancy(mode.Items[0].At(i)*s.beta[i], n.At(i))
-		}
+	case hasClosedShares(mode):
+		s.closedShares(mode, n, dst)
 	default:
 		s.used = 0
 		set := s.nextSet()
 		for i := range dst {
-			dst[i] = set.occupancyOf(mode, n.At(i), i, s.beta[i])
+			level, none := set.find(mode, n.At(i), i, s.beta[i])
+			if dst[i] = none; level >= 0 {
+				dst[i] = set.shareOf(level, s.beta[i])
+			}
 		}
 	}
 }
 
-// occupancyOf gives the share of the n-th level, counted from the lowest
-// upwards, of a ladder whose levels are worked out.
-func (b *levelSet) occupancyOf(mode *law.Argument, n float64, row int, beta float64) float64 {
+// hasClosedShares says whether a share is told without the other levels.
+func hasClosedShares(mode *law.Argument) bool {
+	return mode.Maker == oscillatorLaw && len(mode.Items) == 1 || isStiffRotor(mode)
+}
+
+// closedShares puts the shares of level n of such a ladder into dst.
+func (s *scratch) closedShares(mode, n *law.Argument, dst []float64) {
+	share := rotorOccupancy
+	if mode.Maker == oscillatorLaw {
+		share = oscillatorOccupancy
+	}
+	for i := range dst {
+		dst[i] = share(mode.Items[0].At(i)*s.beta[i], n.At(i))
+	}
+}
+
+// find gives the place of the n-th level, counted from the lowest upwards, of a
+// ladder whose levels are worked out. Where there is none the place is below 0
+// and none is its share: 0 so high that nothing is there, else no number.
+func (b *levelSet) find(mode *law.Argument, n float64, row int, beta float64) (level int, none float64) {
 	mode = unshifted(mode)
 	build := builderOf(mode.Maker)
 	if build == nil || !wholeNumber(n) || !b.prepare(build, mode.Items, row, beta) {
-		return notANumber
+		return -1, notANumber
 	}
 	if n >= float64(len(b.energy)) {
 		if b.truncated {
-			return 0 // so high that nothing is there
+			return -1, 0
 		}
-		return notANumber
+		return -1, notANumber
 	}
 	b.sort()
-	return b.shareOf(b.order[int(n)], beta)
+	return b.order[int(n)], 0
 }
 
 // unshifted takes off what a ladder was shifted by: it moves no share.

@@ -387,5 +387,10 @@ func (b *levelSet) sort() {
 
 // shareOf gives the share of one level among all.
 func (b *levelSet) shareOf(level int, beta float64) float64 {
-	return float64(b.weight[level]*column.Exp(-float64(b.energy[level]*beta))) / b.quantity(beta, partition)
+	return b.shareOver(level, beta, b.quantity(beta, partition))
+}
+
+// shareOver gives the share of one level from the sum of all.
+func (b *levelSet) shareOver(level int, beta, sum float64) float64 {
+	return float64(b.weight[level]*column.Exp(-float64(b.energy[level]*beta))) / sum
 }
