@@ -55,7 +55,7 @@ func gasOf(name string) (g gasSpecies, ok bool) {
 	case atomOf(name+" I") != nil:
 		g.ladder = law.Argument{Maker: atomLaw, Items: text(name+" I", "bound")}
 	case diatomicOf(name) != nil, polyatomicOf(name) != nil:
-		g.ladder = law.Argument{Maker: moleculeLaw, Items: text(name, "all", "alternating")}
+		g.ladder = law.Argument{Maker: moleculeLaw, Items: text(name, "all", "alternating", natural)}
 	default:
 		return g, false
 	}
@@ -131,7 +131,7 @@ func referenceParameter() law.Parameter {
 const (
 	gasSource  = "levels: atom and molecule of this catalogue; " + sackur + "; " + sumsSource + "; conventions of Chase M.W. (1998) NIST-JANAF Thermochemical Tables, 4th ed."
 	gasCaution = "Ideal gas. Atoms and most diatomic molecules agree with the JANAF tables to their last digit at room temperature; the rigid rotors and harmonic oscillators of molecules with three and more atoms " +
-		"are off by some 0.1 J/(mol K) there and by 1 to 5 J/(mol K) above 3000 K, weakly bound ones (I2, Na2, F2, Cl2) above a twentieth of D_0/k_B likewise."
+		"are off by some 0.1 J/(mol K) there and by 1 to 5 J/(mol K) above 3000 K, weakly bound ones (I2, Na2, F2) above a twentieth of D_0/k_B likewise."
 )
 
 // gasWork is a worker's room for the laws of a gas: its levels at the row's

@@ -58,7 +58,7 @@ func closedForm(mode *law.Argument, row int, beta float64, want quantity) (value
 		return warmTop(mode.Items[0].At(row)*beta, mode.Items[1].At(row)*beta, mode.Items[2].At(row), want)
 	case mode.Maker == boxLevelsLaw && len(mode.Items) == 2:
 		return roomyBox(boxUnit(mode.Items[0].At(row), mode.Items[1].At(row))*beta, want)
-	case mode.Maker == moleculeLaw && len(mode.Items) == 3:
+	case mode.Maker == moleculeLaw && len(mode.Items) >= 3:
 		if p := polyatomicOf(mode.Items[0].Text); p != nil && beta > 0 {
 			return p.quantity(beta, want), true
 		}

@@ -228,6 +228,9 @@ func buildMolecule(set *levelSet, items []law.Argument, _ []float64) bool {
 	ground := &d.states[0]
 	for i := range d.states {
 		state := d.states[i].electronicState
+		if len(items) > 3 && items[3].Text == natural {
+			state.scale(isotopeRatio(d.name))
+		}
 		even, odd := d.spinOf(&d.states[i], i == 0, items[2].Text)
 		state.even, state.odd = float64(even*d.states[i].degeneracy), float64(odd*d.states[i].degeneracy)
 		base := 0.0
@@ -251,6 +254,33 @@ func buildMolecule(set *levelSet, items []law.Argument, _ []float64) bool {
 		}
 	}
 	return true
+}
+
+// natural is the word by which the laws of gases ask for the mixture of
+// isotopes found in nature; the ladder itself is that of the lightest.
+const natural = "natural"
+
+// isotopeRatio gives the root of the reduced mass of a molecule's tabulated
+// isotopes over that of the natural mixture. Chlorine is the one element of
+// the table whose isotopes matter: 35Cl has 34.968853 u (Wang M. et al. (2021)
+// Chinese Phys. C 45, 030003), the mixture 35.453.
+func isotopeRatio(name string) float64 {
+	switch name {
+	case "Cl2":
+		return math.Sqrt(34.968853 / 35.453)
+	case "HCl":
+		return math.Sqrt(34.968853 / 35.453 * (35.453 + 1.00794) / (34.968853 + 1.00794))
+	}
+	return 1
+}
+
+// scale turns the constants into those of another isotope: each goes with its
+// power of the reduced mass (Dunham J.L. (1932) Phys. Rev. 41, 721).
+func (e *electronicState) scale(ratio float64) {
+	square := ratio * ratio
+	e.we, e.wexe, e.weye = e.we*ratio, e.wexe*square, e.weye*square*ratio
+	e.be, e.alpha, e.gamma = e.be*square, e.alpha*square*ratio, e.gamma*square*square
+	e.de, e.beta = e.de*square*square, e.beta*square*square*ratio
 }
 
 // hydrogenTerms are the measured levels of H2, v = 0, J = 0 to 6, in cm^-1.
