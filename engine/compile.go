@@ -17,7 +17,7 @@ type compilation struct {
 	problems    problem.List
 	lines       []string
 	symbols     map[string]*symbol
-	names       []string // in the order of the sheet
+	declared    []*symbol // in the order of the sheet
 	scope       *formula.Scope
 	graph       *plan.Graph
 	knowns      []plan.KnownSpec
@@ -38,9 +38,14 @@ type symbol struct {
 	valid   *formula.Expression
 	unit    unit.Unit // the unit it is shown in
 	hasUnit bool
-	needs   []string // names that its formula reads
-	ready   bool
-	entry   int // index among the entries
+	reads   []reading // names of its formula
+	needs   []*symbol // those with formulas that its formula reads
+	users   []*symbol // those whose formulas read it
+	waiting int       // how many of needs are not in order yet
+	// neededBy is the latest one that listed it, so that each is listed once.
+	neededBy *symbol
+	ready    bool
+	entry    int // index among the entries
 }
 
 // compile makes a program; the compilation, with its trees, serves what asks
@@ -60,7 +65,7 @@ func compile(from source) (*Program, *compilation, error) {
 			}
 			return s.Symbol, true
 		},
-		Names:    func() []string { return append([]string(nil), c.names...) },
+		Names:    c.allNames,
 		Make:     c.graph.Make,
 		Problems: &c.problems,
 	}
@@ -115,6 +120,15 @@ func (c *compilation) textAt(at problem.Span) string {
 	return line[from:to] + more
 }
 
+// allNames lists the sheet's names.
+func (c *compilation) allNames() []string {
+	names := make([]string, len(c.declared))
+	for i, s := range c.declared {
+		names[i] = s.name.Value
+	}
+	return names
+}
+
 // declare gives a name to the sheet; it reports one that is taken.
 func (c *compilation) declare(name sheet.Text, s *symbol) bool {
 	if !name.Present() {
@@ -129,7 +143,7 @@ func (c *compilation) declare(name sheet.Text, s *symbol) bool {
 		c.problems.Add(name, problem.Name, "'"+name.Value+"' is the name of a law", "choose another name")
 	}
 	c.symbols[name.Value] = s
-	c.names = append(c.names, name.Value)
+	c.declared = append(c.declared, s)
 	return true
 }
 
@@ -157,6 +171,7 @@ func (c *compilation) declareAll(read *sheet.Sheet) {
 		case *sheet.Derive:
 			d := &symbol{derive: s}
 			d.parsed = c.parse(s.Formula)
+			d.reads = readBy(nil, d.parsed)
 			d.unit, d.hasUnit = unit.One(), s.Unit.Present()
 			d.Broken = d.parsed == nil
 			if u, ok := c.unitOf(s.Unit); ok {
@@ -170,6 +185,7 @@ func (c *compilation) declareAll(read *sheet.Sheet) {
 		case *sheet.Require:
 			r := &symbol{require: s}
 			r.parsed = c.parse(s.Condition)
+			r.reads = readBy(nil, r.parsed)
 			r.Broken = r.parsed == nil
 			if c.declare(s.Name, r) {
 				c.results = append(c.results, r)
@@ -318,6 +334,7 @@ func (c *compilation) declareLaw(s *sheet.Law) {
 		k.Broken = k.Broken || l.Valid == nil
 	}
 	k.parsed, k.valid = l.Body, l.Valid
+	k.reads = readBy(readBy(nil, l.Body), l.Valid)
 	k.Law = l
 	c.declare(s.Name, k)
 }

@@ -41,7 +41,7 @@ func (p *Program) Explain(in rows.Input, name string) (*Explanation, error) {
 	s := c.symbols[name]
 	if s == nil || s.Table != nil || s.Law != nil {
 		message := "the sheet gives no entry '" + name + "'"
-		if near := problem.Nearest(name, c.names); near != "" {
+		if near := problem.Nearest(name, c.allNames()); near != "" {
 			message += "; did you mean " + near + "?"
 		}
 		return nil, errors.New(message)

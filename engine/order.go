@@ -17,72 +17,81 @@ func itoa(n int) string { return strconv.Itoa(n) }
 // made. Names that need each other in a circle are reported and left out as
 // broken.
 func (c *compilation) ordered() []*symbol {
-	users := map[string][]*symbol{}
-	waiting := map[*symbol]int{}
 	var free []*symbol
-	for _, name := range c.names {
-		s := c.symbols[name]
+	order := make([]*symbol, 0, len(c.declared))
+	left := 0
+	for _, s := range c.declared {
 		if s.ready {
 			continue
 		}
-		s.needs = c.needsOf(s)
+		left++
+		c.findNeeds(s)
 		for _, need := range s.needs {
-			users[need] = append(users[need], s)
+			need.users = append(need.users, s)
 		}
-		waiting[s] = len(s.needs)
+		s.waiting = len(s.needs)
 		if len(s.needs) == 0 {
 			free = append(free, s)
 		}
 	}
 	slices.Reverse(free) // the last one is taken first
-	var order []*symbol
 	for len(free) > 0 {
 		s := free[len(free)-1]
 		free = free[:len(free)-1]
 		order = append(order, s)
-		delete(waiting, s)
-		for _, user := range slices.Backward(users[s.name.Value]) {
-			waiting[user]--
-			if waiting[user] == 0 {
+		for _, user := range slices.Backward(s.users) {
+			user.waiting--
+			if user.waiting == 0 {
 				free = append(free, user)
 			}
 		}
 	}
-	if len(waiting) > 0 {
-		order = append(order, c.circles(waiting)...)
+	if len(order) < left {
+		order = append(order, c.circles()...)
 	}
 	return order
 }
 
-// needsOf lists the names with formulas that a formula reads, each once.
-func (c *compilation) needsOf(s *symbol) []string {
-	var needs []string
-	seen := map[string]bool{}
-	local := map[string]bool{}
-	if s.Law != nil {
-		for _, p := range s.Law.Parameters {
-			local[p.Name] = true
+// reading is a name that a formula reads or calls.
+type reading struct {
+	name   string
+	called bool
+}
+
+// readBy lists the names of a formula, while it is fresh.
+func readBy(reads []reading, e *formula.Expression) []reading {
+	if e != nil {
+		e.Names(func(name string, called bool) { reads = append(reads, reading{name, called}) })
+	}
+	return reads
+}
+
+// findNeeds lists the names with formulas that a formula reads, each once.
+func (c *compilation) findNeeds(s *symbol) {
+	for _, r := range s.reads {
+		if s.Law != nil && !r.called && hasParameter(s.Law, r.name) {
+			continue
+		}
+		if other := c.symbols[r.name]; other != nil && !other.ready && other.neededBy != s {
+			other.neededBy = s
+			s.needs = append(s.needs, other)
 		}
 	}
-	visit := func(name string, called bool) {
-		other, known := c.symbols[name]
-		if local[name] && !called || !known || other.ready || seen[name] {
-			return
-		}
-		seen[name] = true
-		needs = append(needs, name)
-	}
-	for _, e := range []*formula.Expression{s.parsed, s.valid} {
-		if e != nil {
-			e.Names(visit)
+	s.reads = nil
+}
+
+func hasParameter(l *formula.UserLaw, name string) bool {
+	for i := range l.Parameters {
+		if l.Parameters[i].Name == name {
+			return true
 		}
 	}
-	return needs
+	return false
 }
 
 // circles reports each circle once, as the path of names, and gives what only
 // hangs on a circle: it is broken without a problem of its own.
-func (c *compilation) circles(waiting map[*symbol]int) []*symbol {
+func (c *compilation) circles() []*symbol {
 	const (
 		unseen = iota
 		onPath
@@ -90,9 +99,8 @@ func (c *compilation) circles(waiting map[*symbol]int) []*symbol {
 	)
 	colour := map[*symbol]int{}
 	var rest []*symbol
-	for _, name := range c.names {
-		start := c.symbols[name]
-		if _, left := waiting[start]; !left {
+	for _, start := range c.declared {
+		if start.waiting == 0 {
 			continue
 		}
 		start.Broken = true
@@ -106,12 +114,10 @@ func (c *compilation) circles(waiting map[*symbol]int) []*symbol {
 			colour[s] = onPath
 			path = append(path, s)
 			var next *symbol
-			for _, need := range s.needs {
-				if other := c.symbols[need]; colour[other] != done {
-					if _, left := waiting[other]; left {
-						next = other
-						break
-					}
+			for _, other := range s.needs {
+				if colour[other] != done && other.waiting > 0 {
+					next = other
+					break
 				}
 			}
 			s = next

@@ -15,11 +15,18 @@ import (
 // whose value is known before the first row is a constant.
 type Graph struct {
 	nodes []*formula.Node
-	index []int32 // open addressing: 1 + the ID of a node, 0 where free
+	index []place // by digest, with open addressing
+}
+
+// place is a place of the index: a node's digest, which tells most others apart
+// without a look at them, and 1 + its ID, 0 where the place is free.
+type place struct {
+	digest uint32
+	id     int32
 }
 
 // NewGraph makes an empty graph.
-func NewGraph() *Graph { return &Graph{index: make([]int32, 64)} }
+func NewGraph() *Graph { return &Graph{index: make([]place, 64)} }
 
 // Make gives the node equal to n, made if it is new. It is the formula room's
 // way of making nodes.
@@ -27,15 +34,16 @@ func (g *Graph) Make(n formula.Node) *formula.Node {
 	if folded, ok := g.fold(&n); ok {
 		n = folded
 	}
-	at := g.find(&n)
-	if known := g.index[at]; known > 0 {
+	d := digest(&n)
+	at := g.find(d, &n)
+	if known := g.index[at].id; known > 0 {
 		return g.nodes[known-1]
 	}
 	made := new(formula.Node)
 	*made = n
 	made.ID = len(g.nodes)
 	g.nodes = append(g.nodes, made)
-	g.index[at] = int32(len(g.nodes))
+	g.index[at] = place{d, int32(len(g.nodes))}
 	if 4*len(g.nodes) > 3*len(g.index) {
 		g.grow()
 	}
@@ -44,19 +52,29 @@ func (g *Graph) Make(n formula.Node) *formula.Node {
 
 // find gives the place in the index of the node equal to n, or the free place
 // where it belongs.
-func (g *Graph) find(n *formula.Node) int {
+func (g *Graph) find(digest uint32, n *formula.Node) int {
 	most := len(g.index) - 1
-	for at := int(digest(n)) & most; ; at = (at + 1) & most {
-		if known := g.index[at]; known == 0 || equal(g.nodes[known-1], n) {
+	for at := int(digest) & most; ; at = (at + 1) & most {
+		p := &g.index[at]
+		if p.id == 0 || p.digest == digest && equal(g.nodes[p.id-1], n) {
 			return at
 		}
 	}
 }
 
 func (g *Graph) grow() {
-	g.index = make([]int32, 2*len(g.index))
-	for id, n := range g.nodes {
-		g.index[g.find(n)] = int32(id + 1)
+	old := g.index
+	g.index = make([]place, 2*len(old))
+	most := len(g.index) - 1
+	for _, p := range old {
+		if p.id == 0 {
+			continue
+		}
+		at := int(p.digest) & most
+		for g.index[at].id != 0 {
+			at = (at + 1) & most
+		}
+		g.index[at] = p
 	}
 }
 
