@@ -56,18 +56,23 @@ type Program struct {
 
 // slot is one step and the place of its value.
 type slot struct {
-	op        formula.Op
-	alias     bool    // the value is that of args[0]
-	risk      int32   // the reason when an operation makes no finite number of finite ones
-	a, b      int32   // the first two of args, 0 where there are fewer
-	value     float64 // of a constant
-	known     int
-	args      []int // slots
+	op       formula.Op
+	alias    bool    // the value is that of args[0]
+	risk     int32   // the reason when an operation makes no finite number of finite ones
+	a, b     int32   // the first two of args, 0 where there are fewer
+	value    float64 // of a constant
+	args     []int   // slots
+	known    int32
+	guard    int32
+	*lawPlan // of formula.Apply
+}
+
+// lawPlan is how a slot calls a law.
+type lawPlan struct {
 	law       *law.Law
 	arguments []argumentPlan
 	checks    []check
-	refusal   int32 // the reason when a law gives no number
-	guard     int32
+	refusal   int32 // the reason when the law gives no number
 }
 
 // argumentPlan says how one argument of a law is put together.
@@ -177,6 +182,17 @@ type builder struct {
 	reasons map[reasonKey]int32
 	texts   map[string]int32
 	source  func(problem.Span) string
+	free    []int // room for the operands of slots
+}
+
+// room gives room for n operands; many slots share one piece of memory.
+func (b *builder) room(n int) []int {
+	if len(b.free) < n {
+		b.free = make([]int, max(n, 1024))
+	}
+	room := b.free[:n:n]
+	b.free = b.free[n:]
+	return room
 }
 
 // text gives the reason with these words, added where it is new.
@@ -227,13 +243,14 @@ func (b *builder) place(n *formula.Node) {
 	case formula.Const:
 		s.value = n.Value
 	case formula.KnownOp:
-		s.known = n.Index
+		s.known = int32(n.Index)
 		b.p.inputs[n.Index] = len(b.p.slots)
 	case formula.Apply:
 		b.placeLaw(n, &s)
 	default:
-		for _, a := range n.Args {
-			s.args = append(s.args, b.slotOf[a.ID])
+		s.args = b.room(len(n.Args))
+		for i, a := range n.Args {
+			s.args[i] = b.slotOf[a.ID]
 		}
 		s.alias = n.Op == formula.Same || n.Op == formula.Entry || n.Op == formula.Guard
 		if n.Op == formula.Entry {
@@ -304,7 +321,7 @@ func costOf(op formula.Op) int {
 const lawCost, numberCost = 50, 2
 
 func (b *builder) placeLaw(n *formula.Node, s *slot) {
-	s.law = n.Law
+	s.lawPlan = &lawPlan{law: n.Law}
 	for i, a := range n.Args {
 		s.arguments = append(s.arguments, b.argument(a))
 		if i < len(n.Law.Parameters) {

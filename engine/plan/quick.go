@@ -263,6 +263,9 @@ func (c *quickPlanner) looksAt(u, operand int) bool {
 	if slot.op == formula.Exp {
 		return true
 	}
+	if slot.op != formula.Apply {
+		return false
+	}
 	for k := range slot.checks {
 		check := &slot.checks[k]
 		if c.q.root[check.slot] == operand && column.Finite(check.low) && column.Finite(check.high) {

@@ -69,9 +69,9 @@ func (p *Program) arrange(shape inputShape, keep bool) *schedule {
 		slot := &p.slots[i]
 		s.scratch[i], s.pinned[i], root[i] = -1, -1, i
 		if slot.op == formula.KnownOp {
-			s.vary[i] = shape.column(slot.known)
+			s.vary[i] = shape.column(int(slot.known))
 			if s.vary[i] {
-				s.inputs = append(s.inputs, slot.known)
+				s.inputs = append(s.inputs, int(slot.known))
 			}
 			continue
 		}

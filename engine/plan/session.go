@@ -159,7 +159,7 @@ func (s *Session) refresh(slot int) bool {
 	number, state := w.single[slot], w.status[slot]
 	w.status[slot] = nil
 	if of.op == formula.KnownOp {
-		w.checkKnown(of.known, slot, 1)
+		w.checkKnown(int(of.known), slot, 1)
 	} else if !s.sound(of.args) || !s.quickly(slot) {
 		w.step(slot, 1)
 		s.own(slot)
