@@ -127,14 +127,7 @@ func sharedOccupancy(dst []float64, arguments []law.Argument, work *law.Work) {
 	case hasClosedShares(mode):
 		s.closedShares(mode, n, dst)
 	default:
-		s.used = 0
-		set := s.nextSet()
-		for i := range dst {
-			level, none := set.find(mode, n.At(i), i, s.beta[i])
-			if dst[i] = none; level >= 0 {
-				dst[i] = set.shareOver(level, s.beta[i], sum.At(i))
-			}
-		}
+		s.workedShares(mode, n, sum, dst)
 	}
 }
 

@@ -75,13 +75,24 @@ func occupancy(dst []float64, arguments []law.Argument, work *law.Work) {
 	case hasClosedShares(mode):
 		s.closedShares(mode, n, dst)
 	default:
-		s.used = 0
-		set := s.nextSet()
-		for i := range dst {
-			level, none := set.find(mode, n.At(i), i, s.beta[i])
-			if dst[i] = none; level >= 0 {
-				dst[i] = set.shareOf(level, s.beta[i])
-			}
+		s.workedShares(mode, n, nil, dst)
+	}
+}
+
+// workedShares puts the shares of level n of a ladder whose levels are worked
+// out into dst; where the sum of all is known, it is not computed again.
+func (s *scratch) workedShares(mode, n, sum *law.Argument, dst []float64) {
+	s.used = 0
+	set := s.nextSet()
+	for i := range dst {
+		level, none := set.find(mode, n.At(i), i, s.beta[i])
+		switch {
+		case level < 0:
+			dst[i] = none
+		case sum == nil:
+			dst[i] = set.shareOf(level, s.beta[i])
+		default:
+			dst[i] = set.shareOver(level, s.beta[i], sum.At(i))
 		}
 	}
 }
