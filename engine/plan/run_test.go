@@ -8,6 +8,7 @@ import (
 	"sync"
 	"testing"
 
+	"plumbrule/engine/column"
 	"plumbrule/engine/law"
 	"plumbrule/engine/rows"
 )
@@ -327,4 +328,28 @@ func BenchmarkRun(b *testing.B) {
 		}
 	}
 	b.ReportMetric(float64(b.Elapsed().Nanoseconds())/float64(b.N)/n, "ns/row")
+}
+
+// TestOneRowByManyGoroutines runs one program of one row in many goroutines:
+// one at a time has the worker that is kept for it, the others do without.
+func TestOneRowByManyGoroutines(t *testing.T) {
+	p := planned(t, "a b", "x = a * exp(b)\ny = x + 1\nz = a > b ? x : y")
+	var group sync.WaitGroup
+	for g := range 8 {
+		group.Go(func() {
+			var out rows.Outcome
+			a, b := float64(g), 1/float64(g+1)
+			for range 500 {
+				if err := p.Run(context.Background(), rows.Input{Rows: 1, Values: [][]float64{{a}, {b}}}, &out, 1); err != nil {
+					t.Error(err)
+					return
+				}
+				if x := float64(a * column.Exp(b)); out.Values[0][0] != x || out.Values[1][0] != x+1 {
+					t.Errorf("goroutine %d: %v", g, out.Values)
+					return
+				}
+			}
+		})
+	}
+	group.Wait()
 }
