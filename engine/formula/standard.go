@@ -87,7 +87,7 @@ func findStandard(name string) (standard, bool) {
 // the catalogue; their dimensions are those of the list.
 var listFunctions = []*law.Law{
 	{Name: "count", Gives: "count(list): how many items", Body: func(dst []float64, a []law.Argument, _ *law.Work) {
-		fill(dst, float64(len(a[0].Items)))
+		column.Fill(dst, float64(len(a[0].Items)))
 	}},
 	{Name: "interpolate", Gives: "interpolate(x, xs, ys): linear between the points of a table, xs rising; refuses outside",
 		Refusal: "the argument lies outside the table, or the table's first list does not rise", Body: interpolateBody},
@@ -114,12 +114,6 @@ func findListFunction(name string) *law.Law {
 		}
 	}
 	return nil
-}
-
-func fill(dst []float64, x float64) {
-	for i := range dst {
-		dst[i] = x
-	}
 }
 
 // sumOf adds one row of a list with a running correction (Neumaier 1974), so

@@ -189,9 +189,7 @@ func (w *worker) quickChoose(s *quickStep, n int) bool {
 		}
 		value, dst := w.values[b.value], w.place(s.slot, n)
 		if len(value) == 1 && n > 1 {
-			for i := range dst {
-				dst[i] = value[0]
-			}
+			column.Fill(dst, value[0])
 		} else {
 			copy(dst, value)
 		}

@@ -48,10 +48,7 @@ func (p *Program) Run(ctx context.Context, in rows.Input, out *rows.Outcome, wor
 	sound := w.begin(in)
 	if sound && len(s.each) == 0 && len(s.inputs) == 0 {
 		for e, slot := range p.outputs {
-			values, x := out.Values[e], w.single[slot]
-			for i := range values {
-				values[i] = x
-			}
+			column.Fill(out.Values[e], w.single[slot])
 		}
 		s.keep(w)
 		return nil
@@ -196,9 +193,7 @@ func (r *run) write(w *worker, from, to int) {
 		}
 		switch {
 		case len(values) == 1 && (n > 1 || !w.s.vary[slot]):
-			for i := range dst {
-				dst[i] = values[0]
-			}
+			column.Fill(dst, values[0])
 		case &values[0] != &dst[0]:
 			copy(dst, values)
 		}

@@ -245,10 +245,7 @@ func (w *worker) pass(slot, from int) {
 		w.values[slot] = w.values[from]
 		return
 	}
-	dst, value := w.values[slot], w.values[from][0]
-	for i := range dst {
-		dst[i] = value
-	}
+	column.Fill(w.values[slot], w.values[from][0])
 }
 
 // mark refuses rows in which a step made no finite number of finite ones.

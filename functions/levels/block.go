@@ -55,7 +55,7 @@ func begin(work *law.Work, temperature *law.Argument, rows int) *scratch {
 		*each = room(*each, rows)
 	}
 	if len(temperature.Values) == 1 {
-		fill(s.beta, inverseOf(temperature.Values[0]))
+		column.Fill(s.beta, inverseOf(temperature.Values[0]))
 	} else {
 		for i, t := range temperature.Values[:rows] {
 			s.beta[i] = inverseOf(t)
@@ -180,13 +180,6 @@ func (s *scratch) nextSet() *levelSet {
 	}
 	s.used++
 	return s.sets[s.used-1]
-}
-
-// fill sets every row to x.
-func fill(rows []float64, x float64) {
-	for i := range rows {
-		rows[i] = x
-	}
 }
 
 // twoSum gives the rounded sum of a and b and exactly what rounding took from

@@ -18,7 +18,7 @@ import (
 func (s *scratch) listed(mode *law.Argument, want quantity, rows int) {
 	energies, degeneracies := mode.Items[0].Items, mode.Items[1].Items
 	if len(energies) != len(degeneracies) || len(energies) == 0 {
-		fill(s.value, notANumber)
+		column.Fill(s.value, notANumber)
 		clear(s.lowest)
 		return
 	}
@@ -94,7 +94,7 @@ func (s *scratch) findLowest(energies []law.Argument) (moving bool) {
 		for i := range energies {
 			lowest = min(lowest, energies[i].Values[0])
 		}
-		fill(s.lowest, lowest)
+		column.Fill(s.lowest, lowest)
 		return false
 	}
 	for row := range s.lowest {

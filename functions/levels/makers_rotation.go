@@ -15,11 +15,12 @@ func rotation(j, b, d float64) float64 {
 
 // addRotations adds the levels J = 0, 1, 2, ... of one state while they rise,
 // up to top and to the set's ceiling, as one run. Even and odd J have weights
-// of their own; those of weight 0 do not exist.
-func addRotations(set *levelSet, base, b, d, even, odd, top, ceiling float64) bool {
+// of their own; those of weight 0 do not exist. The centrifugal constant d
+// lessens with J where yielding is above 0.
+func addRotations(set *levelSet, base, b, d, yielding, even, odd, top, ceiling float64) bool {
 	last := math.Inf(-1)
 	for j := 0.0; ; j++ {
-		turn := rotation(j, b, d)
+		turn := rotation(j, b, lessened(d, yielding, float64(j*(j+1))))
 		energy := base + turn
 		if !(turn > last) || energy > top {
 			break
@@ -49,7 +50,7 @@ func buildRotor(set *levelSet, _ []law.Argument, numbers []float64) bool {
 	if !(b > 0) || !(symmetry > 0) || !(d >= 0) {
 		return false
 	}
-	return addRotations(set, 0, b, d, 1/symmetry, 1/symmetry, math.Inf(1), set.ceiling(float64(2*b)))
+	return addRotations(set, 0, b, d, 0, 1/symmetry, 1/symmetry, math.Inf(1), set.ceiling(float64(2*b)))
 }
 
 var spinRotorLaw = &law.Law{
@@ -80,7 +81,7 @@ func buildSpinRotor(set *levelSet, items []law.Argument, numbers []float64) bool
 		return false
 	}
 	even, odd := spinWeights(spin, items[2].Text)
-	return addRotations(set, 0, b, d, even, odd, math.Inf(1), set.ceiling(float64(12*b)))
+	return addRotations(set, 0, b, d, 0, even, odd, math.Inf(1), set.ceiling(float64(12*b)))
 }
 
 // spinWeights gives the weights of even and odd J of a species.
@@ -234,7 +235,7 @@ func stateOf(we, wexe, be, alpha, de, weye, gamma, beta, dissociation, even, odd
 type electronicState struct {
 	we, wexe, weye   float64
 	be, alpha, gamma float64
-	de, beta         float64
+	de, beta, third  float64 // third: of (J(J + 1))^3, known to gases alone
 	even, odd        float64 // weights of even and odd J
 	mostVibration    float64 // bound of G(v) - G(0); 0: the dissociation energy alone
 }
@@ -257,7 +258,7 @@ func (e *electronicState) add(set *levelSet, base, top float64) bool {
 			return true
 		}
 		b, d := e.turning(v)
-		if !addRotations(set, base+swing, b, d, e.even, e.odd, top, ceiling) {
+		if !addRotations(set, base+swing, b, d, e.yielding(d), e.even, e.odd, top, ceiling) {
 			return false
 		}
 		last = swing

@@ -220,16 +220,22 @@ func buildMolecule(set *levelSet, items []law.Argument, _ []float64) bool {
 	if d == nil || len(items) < 3 {
 		return false
 	}
+	asGas := len(items) > 3 && items[3].Text == natural
 	if pi := doubletOf(d.name); pi != nil {
 		weight, _ := d.spinOf(&d.states[0], true, items[2].Text)
-		return pi.add(set, &d.states[0].electronicState, weight)
+		state := d.states[0].electronicState
+		if asGas {
+			state.stretch()
+		}
+		return pi.add(set, &state, weight)
 	}
 	top := d.dissociation
 	ground := &d.states[0]
 	for i := range d.states {
 		state := d.states[i].electronicState
-		if len(items) > 3 && items[3].Text == natural {
+		if asGas {
 			state.scale(isotopeRatio(d.name))
+			state.stretch()
 		}
 		even, odd := d.spinOf(&d.states[i], i == 0, items[2].Text)
 		state.even, state.odd = float64(even*d.states[i].degeneracy), float64(odd*d.states[i].degeneracy)
@@ -237,8 +243,8 @@ func buildMolecule(set *levelSet, items []law.Argument, _ []float64) bool {
 		if i > 0 {
 			base = d.states[i].term + zeroPoint(&state) - zeroPoint(&ground.electronicState)
 		}
-		if d.name == "D2" || d.name == "HD" {
-			// Their constants describe the levels up to these bounds.
+		if !asGas && (d.name == "D2" || d.name == "HD") {
+			// Without the third power of J(J + 1) levels hold up to these bounds.
 			state.mostVibration, top = 36000*reciprocal, 38000*reciprocal
 		}
 		if !state.add(set, base, top) {
@@ -254,33 +260,6 @@ func buildMolecule(set *levelSet, items []law.Argument, _ []float64) bool {
 		}
 	}
 	return true
-}
-
-// natural is the word by which the laws of gases ask for the mixture of
-// isotopes found in nature; the ladder itself is that of the lightest.
-const natural = "natural"
-
-// isotopeRatio gives the root of the reduced mass of a molecule's tabulated
-// isotopes over that of the natural mixture. Chlorine is the one element of
-// the table whose isotopes matter: 35Cl has 34.968853 u (Wang M. et al. (2021)
-// Chinese Phys. C 45, 030003), the mixture 35.453.
-func isotopeRatio(name string) float64 {
-	switch name {
-	case "Cl2":
-		return math.Sqrt(34.968853 / 35.453)
-	case "HCl":
-		return math.Sqrt(34.968853 / 35.453 * (35.453 + 1.00794) / (34.968853 + 1.00794))
-	}
-	return 1
-}
-
-// scale turns the constants into those of another isotope: each goes with its
-// power of the reduced mass (Dunham J.L. (1932) Phys. Rev. 41, 721).
-func (e *electronicState) scale(ratio float64) {
-	square := ratio * ratio
-	e.we, e.wexe, e.weye = e.we*ratio, e.wexe*square, e.weye*square*ratio
-	e.be, e.alpha, e.gamma = e.be*square, e.alpha*square*ratio, e.gamma*square*square
-	e.de, e.beta = e.de*square*square, e.beta*square*square*ratio
 }
 
 // hydrogenTerms are the measured levels of H2, v = 0, J = 0 to 6, in cm^-1.
@@ -314,11 +293,11 @@ func doubletOf(name string) *doublet {
 	return nil
 }
 
-// mostDoubled is the highest J + 1/2 that is counted.
-const mostDoubled = 80
+// mostDoubled bounds J + 1/2, beyond all bound levels of the doublets.
+const mostDoubled = 400
 
 // turn gives F_1 (upper false) or F_2 for n = J + 1/2, in the unit of b and d.
-func (p *doublet) turn(n, b, d, coupling float64, upper bool) float64 {
+func (p *doublet) turn(n, b, d, yielding, coupling float64, upper bool) float64 {
 	y := coupling / b
 	root := math.Sqrt(float64(4*float64(n*n)) + float64(y*(y-4)))
 	sign, far := -0.5, n-0.5
@@ -326,7 +305,7 @@ func (p *doublet) turn(n, b, d, coupling float64, upper bool) float64 {
 		sign, far = 0.5, n+0.5
 	}
 	square := float64(far * far)
-	return float64(b*(float64(n*n)-1+float64(sign*root))) - float64(d*float64(square*square))
+	return float64(b*(float64(n*n)-1+float64(sign*root))) - float64(lessened(d, yielding, square)*float64(square*square))
 }
 
 func (p *doublet) add(set *levelSet, e *electronicState, weight float64) bool {
@@ -339,7 +318,7 @@ func (p *doublet) add(set *levelSet, e *electronicState, weight float64) bool {
 	if p.centrifugal > 0 {
 		d = p.centrifugal * reciprocal
 	}
-	lowest := p.turn(first, b, d, coupling, false)
+	lowest := p.turn(first, b, d, e.yielding(d), coupling, false)
 	ceiling := set.ceiling(float64(8 * b))
 	last := math.Inf(-1)
 	for v := 0.0; ; v++ {
@@ -361,11 +340,13 @@ func (p *doublet) add(set *levelSet, e *electronicState, weight float64) bool {
 			if upper == (coupling > 0) {
 				n = 2
 			}
+			before := math.Inf(-1)
 			for ; n <= mostDoubled; n++ {
-				energy := swing + p.turn(n, b, d, coupling, upper) - lowest
-				if energy > p.highest*reciprocal {
+				energy := swing + p.turn(n, b, d, e.yielding(d), coupling, upper) - lowest
+				if energy > p.highest*reciprocal || !(energy > before) {
 					break
 				}
+				before = energy
 				if energy > ceiling {
 					set.truncated = true
 					break

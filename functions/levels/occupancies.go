@@ -95,7 +95,7 @@ func sharedSum(dst []float64, arguments []law.Argument, work *law.Work) {
 		s.listed(mode, partition, len(dst))
 		copy(dst, s.value)
 	case hasClosedShares(mode):
-		fill(dst, 1)
+		column.Fill(dst, 1)
 	default:
 		s.used = 0
 		set, build := s.nextSet(), builderOf(mode.Maker)
@@ -117,7 +117,7 @@ func sharedOccupancy(dst []float64, arguments []law.Argument, work *law.Work) {
 	case mode.Maker == ladderLaw && len(mode.Items) >= 2:
 		energies, degeneracies, at := mode.Items[0].Items, mode.Items[1].Items, int(n.Values[0])
 		if at >= len(energies) || len(energies) != len(degeneracies) {
-			fill(dst, notANumber)
+			column.Fill(dst, notANumber)
 			return
 		}
 		s.findLowest(energies)

@@ -31,7 +31,7 @@ var partitionSumLaw = &law.Law{
 
 func partitionSum(dst []float64, arguments []law.Argument, work *law.Work) {
 	s := begin(work, &arguments[1], len(dst))
-	fill(dst, 1)
+	column.Fill(dst, 1)
 	s.fold(&arguments[0], partition, dst)
 	for i, sum := range dst {
 		shift := float64(-s.offset[i] * s.beta[i])
