@@ -87,15 +87,24 @@ func (w *worker) quickSlots(slots []int) bool {
 	single, all := w.single, w.p.slots
 	for _, i := range slots {
 		s := &all[i]
+		// The usual steps first: a switch asks several times.
+		if s.op == formula.Mul {
+			single[i] = float64(single[s.a] * single[s.b])
+			continue
+		}
+		if s.op == formula.Entry {
+			single[i] = single[s.a]
+			if !column.Finite(single[i]) {
+				return false
+			}
+			continue
+		}
 		switch s.op {
 		case formula.Add:
 			single[i] = single[s.a] + single[s.b]
 			continue
 		case formula.Sub:
 			single[i] = single[s.a] - single[s.b]
-			continue
-		case formula.Mul:
-			single[i] = float64(single[s.a] * single[s.b])
 			continue
 		case formula.Div:
 			single[i] = single[s.a] / single[s.b]
@@ -104,7 +113,7 @@ func (w *worker) quickSlots(slots []int) bool {
 				return false
 			}
 			continue
-		case formula.Same, formula.Entry:
+		case formula.Same:
 			single[i] = single[s.a]
 		case formula.Guard:
 			single[i] = single[s.a]
