@@ -129,8 +129,8 @@ func referenceParameter() law.Parameter {
 }
 
 const (
-	gasSource  = "levels: atom and molecule of this catalogue; " + sackur + "; " + sumsSource + "; conventions of Chase M.W. (1998) NIST-JANAF Thermochemical Tables, 4th ed."
-	gasCaution = "Ideal gas. Atoms and most diatomic molecules agree with the JANAF tables to their last digit at room temperature; the rigid rotors and harmonic oscillators of molecules with three and more atoms " +
+	gasSource  = "levels: atom and molecule of this catalogue, diatomic hydrides with beta_e (Pekeris C.L. (1934) Phys. Rev. 45, 98) and H_e (Dunham J.L. (1932) Phys. Rev. 41, 721), chlorine as the natural mixture; " + sackur + "; " + sumsSource + "; conventions of Chase M.W. (1998) NIST-JANAF Thermochemical Tables, 4th ed."
+	gasCaution = "Ideal gas. Atoms and most diatomic molecules agree with the JANAF tables to their last digit at room temperature, up to 3000 K within 0.1 J/(mol K), O2, HF and HCl within 0.16 in the heat capacity; the rigid rotors and harmonic oscillators of molecules with three and more atoms " +
 		"are off by some 0.1 J/(mol K) there and by 1 to 5 J/(mol K) above 3000 K, weakly bound ones (I2, Na2, F2) above a twentieth of D_0/k_B likewise."
 )
 
