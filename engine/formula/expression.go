@@ -10,7 +10,7 @@ import (
 // Limits on one formula.
 const (
 	MostCharacters = 10_000 // of text
-	MostParts      = 10_000 // numbers, names, operators and calls
+	MostParts      = 10_000 // expressions, as often as a walk over the tree meets them
 )
 
 // Form says which construct an Expression is.

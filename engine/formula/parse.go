@@ -17,16 +17,12 @@ func Parse(formula string, source Source, problems *problem.List) *Expression {
 	if !ok {
 		return nil
 	}
-	if len(tokens) > MostParts {
-		problems.Add(source.SpanOf(0, 1), problem.Limit, "the formula has more than 10,000 parts", "split it into several entries")
-		return nil
-	}
 	p := &parser{formula: formula, tokens: tokens, source: newPlaces(formula, source), problems: problems}
 	whole := p.expression(lowest)
 	if !p.failed && p.now().kind != endToken {
 		p.misfit()
 	}
-	if p.failed {
+	if p.wrong {
 		return nil
 	}
 	return whole.Expression
@@ -40,14 +36,17 @@ type parser struct {
 	at       int
 	source   *places
 	problems *problem.List
+	parts    int  // expressions, each as often as a walk over the tree meets it
+	wrong    bool // a problem has been reported
 	failed   bool // nothing more can be read
 }
 
 // operand is a part of the formula with the bytes that it stands in, the
-// parentheses around it included.
+// parentheses and the plus signs around it included.
 type operand struct {
 	*Expression
 	from, to int
+	signed   bool // a plus sign stands before it
 }
 
 // What binds tighter has the higher number. A choice binds least of all and
@@ -117,10 +116,13 @@ func (p *parser) expect(sign string) int {
 
 func (p *parser) span(from, to int) problem.Span { return p.source.SpanOf(from, to-from) }
 
-// made gives an expression its place.
+// made counts an expression and gives it its place.
 func (p *parser) made(e *Expression, from, to int) operand {
+	if p.parts++; p.parts > MostParts {
+		p.fail(p.span(0, 1), problem.Limit, "the formula has more than 10,000 parts", "split it into several entries")
+	}
 	e.Span = p.span(from, to)
-	return operand{e, from, to}
+	return operand{Expression: e, from: from, to: to}
 }
 
 // expression reads what binds at least as tight as least.
@@ -152,16 +154,26 @@ func (p *parser) binary(operator string, left, right operand) operand {
 }
 
 // chain reads a comparison and those that follow on its right side: each pair
-// must hold.
+// must hold. What stands between two signs is a part of both comparisons, so
+// that chains within chains double with each level: they are counted so. All
+// else has no more parts than the formula has characters.
 func (p *parser) chain(left operand, operator string) operand {
-	right := p.expression(compares + 1)
+	right, parts := p.compared()
 	all := p.binary(operator, left, right)
 	for !p.failed && p.now().kind == signToken && ordering(p.now().text) {
+		p.parts += parts
 		operator, left = p.take().text, right
-		right = p.expression(compares + 1)
+		right, parts = p.compared()
 		all = p.binary("and", all, p.binary(operator, left, right))
 	}
 	return all
+}
+
+// compared reads the right side of a comparison and counts its parts.
+func (p *parser) compared() (right operand, parts int) {
+	before := p.parts
+	right = p.expression(compares + 1)
+	return right, p.parts - before
 }
 
 // choice reads what follows a condition.
@@ -195,7 +207,7 @@ func (p *parser) unary() operand {
 	sign := p.take()
 	of := p.expression(binds)
 	if sign.text == "+" {
-		return operand{of.Expression, sign.from, of.to}
+		return operand{of.Expression, sign.from, of.to, true}
 	}
 	return p.made(&Expression{Form: Unary, Word: sign.text, Parts: []*Expression{of.Expression}}, sign.from, of.to)
 }
@@ -216,7 +228,8 @@ func (p *parser) primary() operand {
 	case p.is("("):
 		p.take()
 		inner := p.expression(lowest)
-		return operand{inner.Expression, t.from, p.expect(")")}
+		inner.from, inner.to = t.from, p.expect(")")
+		return inner
 	case p.is("["):
 		p.take()
 		list := &Expression{Form: List}
@@ -256,7 +269,7 @@ func (p *parser) name(t *token) operand {
 // name, which the scanner has made sure of.
 func (p *parser) call(name *token) operand {
 	p.take()
-	call := &Expression{Form: Call, Word: name.text, Span: p.span(name.from, name.to)}
+	call := &Expression{Form: Call, Word: name.text}
 	to := p.items(")", func() {
 		t := p.now()
 		if next := &p.tokens[min(p.at+1, len(p.tokens)-1)]; t.kind != nameToken || next.kind != signToken || next.text != ":" {
@@ -269,21 +282,22 @@ func (p *parser) call(name *token) operand {
 		option.Value = p.expression(lowest).Expression
 		call.Options = append(call.Options, option)
 	})
-	call.whole = p.span(name.from, to)
-	return operand{call, name.from, to}
+	all := p.made(call, name.from, to)
+	call.Span, call.whole = p.span(name.from, name.to), call.Span
+	return all
 }
 
-// postfix reads the units and the field that follow a value. A truth has none.
+// postfix reads the units and the field that follow a value.
 func (p *parser) postfix(value operand) operand {
-	for !p.failed && value.Form != Truth {
+	for !p.failed {
 		t := p.now()
 		switch {
 		case t.kind == unitToken:
 			p.take()
-			u, failed := ReadUnit(t.text, func(offset, length int) problem.Span {
+			u, wrong := ReadUnit(t.text, func(offset, length int) problem.Span {
 				return p.span(t.from+1+offset, t.from+1+offset+length)
 			}, p.problems)
-			p.failed = failed
+			p.wrong = p.wrong || wrong
 			value = p.made(&Expression{Form: WithUnit, Unit: u, Parts: []*Expression{value.Expression}}, value.from, t.to)
 		case p.is("."):
 			p.take()
@@ -303,20 +317,30 @@ func (p *parser) field(owner operand) operand {
 		return owner
 	}
 	p.take()
+	at := p.span(t.from, t.to)
 	switch {
-	case owner.Form != Name:
-		p.fail(p.span(t.from, t.to), problem.Construct, "only a table's column and a constant of nature are read with a dot", "")
 	case p.is("("):
-		p.fail(p.span(t.from, t.to), problem.Construct, "only a law's name is called", "write the law's name alone before its arguments")
+		p.report(at, problem.Construct, "only a law's name is called", "write the law's name alone before its arguments")
+		return p.call(t)
+	case owner.Form != Name || owner.signed:
+		p.report(at, problem.Construct, "only a table's column and a constant of nature are read with a dot", "")
+		return p.made(&Expression{Form: Name}, owner.from, t.to) // further dots are the same mistake
 	}
 	return p.made(&Expression{Form: Member, Word: owner.Word, Field: t.text}, owner.from, t.to)
 }
 
-func (p *parser) fail(at problem.Span, code problem.Code, message, suggestion string) {
+// report tells a problem behind which reading goes on: all of them are told.
+func (p *parser) report(at problem.Span, code problem.Code, message, suggestion string) {
 	if !p.failed {
-		p.failed = true
+		p.wrong = true
 		p.problems.Add(at, code, message, suggestion)
 	}
+}
+
+// fail tells a problem behind which nothing can be read.
+func (p *parser) fail(at problem.Span, code problem.Code, message, suggestion string) {
+	p.report(at, code, message, suggestion)
+	p.failed = true
 }
 
 // misfit reports that the current token does not fit.
@@ -331,12 +355,8 @@ func (p *parser) misfit() {
 		p.fail(p.source.SpanOf(max(0, last), 1), problem.Syntax, "the formula ends before it is complete", advice)
 		return
 	}
-	to := t.to
-	if t.kind == unitToken {
-		to = t.from + 1
-	}
-	word := p.formula[t.from:to]
-	p.fail(p.span(t.from, to), problem.Syntax, quote(word)+" does not fit here", misfitAdvice(word))
+	word := p.formula[t.from:t.to]
+	p.fail(p.span(t.from, t.to), problem.Syntax, quote(word)+" does not fit here", misfitAdvice(word))
 }
 
 const choiceAdvice = "write a choice as condition ? value : other value"
@@ -357,7 +377,7 @@ func misfitAdvice(token string) string {
 	case "?":
 		return choiceAdvice
 	}
-	if strings.Contains("+-*/^<>===!=<=>=and or.", token) {
+	if power(token) > 0 || token == "." {
 		return "a value is missing before it"
 	}
 	if _, err := unit.Parse(token); err == nil {

@@ -1,200 +1,13 @@
 package formula
 
 import (
-	"math/rand/v2"
-	"strconv"
+	"slices"
 	"strings"
 	"testing"
-
-	"github.com/expr-lang/expr/ast"
-	reference "github.com/expr-lang/expr/parser"
+	"unicode/utf8"
 
 	"plumbrule/engine/problem"
 )
-
-// written is a formula in two spellings: ours, and that of the library whose
-// grammar is the reference.
-type written struct{ ours, reference string }
-
-func (w written) in(before, after string) written {
-	return written{before + w.ours + after, before + w.reference + after}
-}
-
-// join writes two formulas with something between them.
-func (w written) join(between string, other written) written {
-	return written{w.ours + between + other.ours, w.reference + between + other.reference}
-}
-
-// writer writes random formulas.
-type writer struct{ *rand.Rand }
-
-func (w writer) one(of ...string) string { return of[w.IntN(len(of))] }
-
-// blank is a blank or nothing.
-func (w writer) blank() string { return w.one("", " ") }
-
-func (w writer) formula(depth int) written {
-	if depth <= 0 {
-		return w.value(0)
-	}
-	switch w.IntN(12) {
-	case 0:
-		return w.formula(depth-1).in("-", "")
-	case 1:
-		return w.formula(depth-1).in("not ", "")
-	case 2:
-		return w.formula(depth-1).join(" ? ", w.formula(depth-1)).join(" : ", w.formula(depth-1))
-	case 3, 4:
-		return w.value(depth)
-	}
-	operator := w.one("+", "-", "*", "/", "^", "<", ">", "<=", ">=", "==", "!=", " and ", " or ", "*", "+", "^", "<")
-	return w.formula(depth-1).join(w.blank()+operator+w.blank(), w.formula(depth-1))
-}
-
-// value is a formula that something may follow.
-func (w writer) value(depth int) written {
-	var v written
-	number := false
-	switch k := w.IntN(10); {
-	case k < 3 || depth <= 0 && k > 5:
-		text := w.one("2", "0.5", "1e3", "7.25", "12")
-		v, number = written{text, text}, true
-		if !strings.ContainsAny(text, ".e") {
-			v.reference += ".0"
-		}
-	case k < 5 || depth <= 0:
-		name := w.one("a", "b", "length", "Ω", "x1")
-		v = written{name, name}
-	case k == 5:
-		v = written{"table.column", "table.column"}
-	case k == 6:
-		v = w.items(depth, w.one("f", "g")+"(", ")")
-	case k == 7:
-		v = w.items(depth, "[", "]")
-	default:
-		v = w.formula(depth-1).in("("+w.blank(), w.blank()+")")
-	}
-	if w.IntN(4) == 0 {
-		v.ours += w.blank() + "[m]"
-		if number {
-			v.reference = "(" + v.reference + ")"
-		}
-		v.reference += "[0]"
-	}
-	return v
-}
-
-// items are arguments, at times with a named one behind, or a list.
-func (w writer) items(depth int, opening, closing string) written {
-	all := written{opening, opening}
-	n := w.IntN(4)
-	for i := range n {
-		if i > 0 {
-			all = all.join(", ", written{})
-		}
-		all = all.join("", w.formula(depth-1))
-	}
-	if closing == ")" && w.IntN(3) == 0 {
-		if n > 0 {
-			all = all.join(", ", written{})
-		}
-		value := w.formula(depth - 1)
-		all.ours += "option: " + value.ours
-		all.reference += "{option: " + value.reference + "}"
-	}
-	return all.join("", written{closing, closing})
-}
-
-// shown writes an expression with every parenthesis.
-func shown(e *Expression) string {
-	parts := make([]string, 0, 3)
-	for _, part := range e.Parts {
-		parts = append(parts, shown(part))
-	}
-	switch e.Form {
-	case Number:
-		return strconv.FormatFloat(e.Value, 'g', -1, 64)
-	case Name:
-		return e.Word
-	case Member:
-		return e.Word + "." + e.Field
-	case WithUnit:
-		return parts[0] + "[]"
-	case Unary, Binary, Choice:
-		return "(" + e.Word + " " + strings.Join(parts, " ") + ")"
-	case Call, List:
-		for _, option := range e.Options {
-			parts = append(parts, option.Name+":"+shown(option.Value))
-		}
-		return e.Word + "<" + strings.Join(parts, " ") + ">"
-	}
-	return "?"
-}
-
-// shownTree writes the library's tree in the same way.
-func shownTree(node ast.Node) string {
-	list := func(nodes []ast.Node) string {
-		var parts []string
-		for _, n := range nodes {
-			if options, is := n.(*ast.MapNode); is {
-				pair := options.Pairs[0].(*ast.PairNode)
-				parts = append(parts, pair.Key.(*ast.StringNode).Value+":"+shownTree(pair.Value))
-				continue
-			}
-			parts = append(parts, shownTree(n))
-		}
-		return "<" + strings.Join(parts, " ") + ">"
-	}
-	switch n := node.(type) {
-	case *ast.FloatNode:
-		return strconv.FormatFloat(n.Value, 'g', -1, 64)
-	case *ast.IdentifierNode:
-		return n.Value
-	case *ast.MemberNode:
-		if field, is := n.Property.(*ast.StringNode); is {
-			return shownTree(n.Node) + "." + field.Value
-		}
-		return shownTree(n.Node) + "[]"
-	case *ast.UnaryNode:
-		return "(" + n.Operator + " " + shownTree(n.Node) + ")"
-	case *ast.BinaryNode:
-		operator := n.Operator
-		if operator == "&&" { // a chain of comparisons
-			operator = "and"
-		}
-		return "(" + operator + " " + shownTree(n.Left) + " " + shownTree(n.Right) + ")"
-	case *ast.ConditionalNode:
-		return "( " + shownTree(n.Cond) + " " + shownTree(n.Exp1) + " " + shownTree(n.Exp2) + ")"
-	case *ast.CallNode:
-		return shownTree(n.Callee) + list(n.Arguments)
-	case *ast.ArrayNode:
-		return list(n.Nodes)
-	}
-	return "?"
-}
-
-// TestGrammarIsThatOfTheReference parses random formulas as expr-lang/expr
-// does: precedence, associativity, chains of comparisons, choices, calls.
-func TestGrammarIsThatOfTheReference(t *testing.T) {
-	w := writer{rand.New(rand.NewPCG(11, 13))}
-	longest := 0
-	for range 20_000 {
-		f := w.formula(1 + w.IntN(5))
-		longest = max(longest, len(f.ours))
-		var problems problem.List
-		e := Parse(f.ours, fixedPlace{}, &problems)
-		tree, err := reference.Parse(f.reference)
-		if e == nil || err != nil {
-			t.Fatalf("%s: %v; %s: %v", f.ours, problems.Sorted(), f.reference, err)
-		}
-		if got, want := shown(e), shownTree(tree.Node); got != want {
-			t.Fatalf("%s\n%s\n%s", f.ours, got, want)
-		}
-	}
-	if longest < 200 {
-		t.Errorf("the longest formula has only %d characters", longest)
-	}
-}
 
 // TestParse fixes what formulas are made of, by hand.
 func TestParse(t *testing.T) {
@@ -214,6 +27,9 @@ func TestParse(t *testing.T) {
 		{"f(a, h: 2[m])", "f<a h:2[]>"},
 		{"[1, 2][m]", "<1 2>[]"},
 		{"item(t.x, 2)", "item<t.x 2>"},
+		{"(true)[m]", "true[]"},
+		{"(+(a))[m]", "a[]"},
+		{"((t)).x", "t.x"},
 	} {
 		var problems problem.List
 		e := Parse(test.formula, fixedPlace{}, &problems)
@@ -236,6 +52,7 @@ func TestPlacesOfParts(t *testing.T) {
 		{"-(a)", "-", "-(a)"},
 		{"f( (a), b ) * 2", "*", "f( (a), b ) * 2"},
 		{"(a < b) and c", "<", "a < b"},
+		{"b - +a * b", "*", "+a * b"},
 	} {
 		var problems problem.List
 		e := Parse(test.formula, wholeLine{}, &problems)
@@ -282,11 +99,16 @@ func TestMisfits(t *testing.T) {
 		{"f(a b)", "'b' does not fit here"},
 		{"[1 2]", "'2' does not fit here"},
 		{"(a, b)", "',' does not fit here"},
-		{"true[m]", "'[' does not fit here"},
+		{"t.[m]", "'[' does not fit here"},
 		{"a not b", "'not' does not fit here"},
 		{"(a + b).c", "only a table's column and a constant of nature are read with a dot"},
-		{"a.b.c", "only a table's column and a constant of nature are read with a dot"},
+		{"a.b.c.d", "only a table's column and a constant of nature are read with a dot"},
+		{"(+a).b", "only a table's column and a constant of nature are read with a dot"},
+		{"true.b", "only a table's column and a constant of nature are read with a dot"},
 		{"a.b(c)", "only a law's name is called"},
+		{"a.b.c(2)", "only a law's name is called"},
+		{"f 3[m]", "'3' does not fit here"},
+		{"f.3[m]", "'.3' does not fit here"},
 		{"a.(b)", "'(' does not fit here"},
 		{"f(a,)", "')' does not fit here"},
 		{"(a", "this '(' is not closed"},
@@ -304,25 +126,204 @@ func TestMisfits(t *testing.T) {
 	}
 }
 
-// FuzzParse parses any text: it ends without a panic, and what is wrong stands
-// in the text.
+// TestAllProblems demands that reading goes on behind what has a place of its
+// own to be mended.
+func TestAllProblems(t *testing.T) {
+	for _, test := range []struct {
+		formula string
+		columns []int
+	}{
+		{"3[flurb] + 4[flarb]", []int{3, 14}},
+		{"f(a.b.c, 2[flurb])", []int{7, 12}},
+		{"a.b(c) + 2[flurb] *", []int{3, 12, 19}},
+		{"[1[flurb], 2] < ) 3[flarb]", []int{17}}, // brackets come first
+	} {
+		var problems problem.List
+		if e := Parse(test.formula, wholeLine{}, &problems); e != nil {
+			t.Errorf("%s: %s", test.formula, shown(e))
+		}
+		var columns []int
+		for _, p := range problems.Sorted() {
+			columns = append(columns, p.Column)
+		}
+		if !slices.Equal(columns, test.columns) {
+			t.Errorf("%s: %v", test.formula, problems.Sorted())
+		}
+	}
+}
+
+// TestAdvice fixes what is advised for a word that does not fit: a unit's
+// symbol is told as one, even if it stands within the words of operators.
+func TestAdvice(t *testing.T) {
+	for _, test := range []struct{ formula, advice string }{
+		{"3 d", "a unit stands in brackets, as in 5[d]"},
+		{"3 n", "join two values by an operator, or part them by a comma; a product is written with *"},
+		{"3 + and", "a value is missing before it"},
+		{"3 * /", "a value is missing before it"},
+		{"3 flurb", "join two values by an operator, or part them by a comma; a product is written with *"},
+	} {
+		var problems problem.List
+		Parse(test.formula, wholeLine{}, &problems)
+		if found := problems.Sorted(); len(found) != 1 || found[0].Suggestion != test.advice {
+			t.Errorf("%s: %v", test.formula, found)
+		}
+	}
+}
+
+// visits counts the expressions of a tree as a walk meets them.
+func visits(e *Expression) int {
+	n := 1
+	for _, part := range e.Parts {
+		n += visits(part)
+	}
+	for _, option := range e.Options {
+		n += visits(option.Value)
+	}
+	return n
+}
+
+// TestParts demands that no walk over a formula is longer than the limit on
+// its parts, however chains of comparisons stand in chains.
+func TestParts(t *testing.T) {
+	nested := func(n int) string {
+		return strings.Repeat("(0<", n) + "x" + strings.Repeat("<1?1:2)", n)
+	}
+	for _, test := range []struct {
+		name, formula string
+		fits          bool
+	}{
+		{"long sum", strings.Repeat("a+", MostCharacters/2-1) + "a", true},
+		{"signs", strings.Repeat("-", MostCharacters-1) + "a", true},
+		{"units", "a" + strings.Repeat("[1]", MostCharacters/3-1), true},
+		{"deep parentheses", strings.Repeat("(", MostCharacters/2-1) + "a" + strings.Repeat(")", MostCharacters/2-1), true},
+		{"deep lists", strings.Repeat("[", MostCharacters/2-1) + "a" + strings.Repeat("]", MostCharacters/2-1), true},
+		{"deep calls", strings.Repeat("f(", MostCharacters/3-1) + "a" + strings.Repeat(")", MostCharacters/3-1), true},
+		{"deep options", strings.Repeat("f(h:", MostCharacters/5-1) + "a" + strings.Repeat(")", MostCharacters/5-1), true},
+		{"deep powers", strings.Repeat("a^", MostCharacters/2-1) + "a", true},
+		{"choices behind", strings.Repeat("c?a:", MostCharacters/4-1) + "a", true},
+		{"choices within", strings.Repeat("c?", MostCharacters/4-1) + "a" + strings.Repeat(":a", MostCharacters/4-1), true},
+		{"chain", "-" + strings.Repeat("a<", 2_500) + "a", true}, // 4 n - 1 parts and the sign
+		{"chain and one part", "--" + strings.Repeat("a<", 2_500) + "a", false},
+		{"chains in chains", nested(10), true},
+		{"more chains in chains", nested(11), false},
+		{"very many chains in chains", nested(900), false},
+	} {
+		var problems problem.List
+		e := Parse(test.formula, wholeLine{}, &problems)
+		switch found := problems.Sorted(); {
+		case test.fits && (e == nil || visits(e) > MostParts):
+			t.Errorf("%s: %v", test.name, found)
+		case !test.fits && (e != nil || len(found) != 1 || found[0].Code != problem.Limit):
+			t.Errorf("%s: %v", test.name, found)
+		}
+	}
+	nine, ten := visits(Parse(nested(9), wholeLine{}, new(problem.List))), visits(Parse(nested(10), wholeLine{}, new(problem.List)))
+	if ten < 2*nine || 2*ten < MostParts {
+		t.Errorf("the parts of nine chains in chains are met %d times, of ten %d times", nine, ten)
+	}
+}
+
+// lines is a source over the lines of its own text.
+type lines string
+
+func (l lines) SpanOf(offset, length int) problem.Span {
+	from := min(max(offset, 0), len(l))
+	to := min(max(offset+length, from), len(l))
+	before, stretch := string(l[:from]), string(l[from:to])
+	stretch, _, _ = strings.Cut(stretch, "\n")
+	start := strings.LastIndexByte(before, '\n') + 1
+	return problem.Span{
+		Line:   1 + strings.Count(before, "\n"),
+		Column: 1 + utf8.RuneCountInString(before[start:]),
+		Length: utf8.RuneCountInString(stretch),
+	}
+}
+
+// holds says whether a place lies in the text, or right behind the end of a line.
+func (l lines) holds(at problem.Span) bool {
+	rows := strings.Split(string(l), "\n")
+	return at.Line >= 1 && at.Line <= len(rows) && at.Column >= 1 && at.Length >= 0 &&
+		at.Column-1+at.Length <= utf8.RuneCountInString(rows[at.Line-1])+1
+}
+
+// within says whether a place lies in another of one line.
+func within(a, b problem.Span) bool {
+	return a.Line != b.Line || a.Column >= b.Column && a.Column+a.Length <= b.Column+b.Length
+}
+
+// misplaced gives a part that does not stand in the text, on any character, or
+// in its whole.
+func misplaced(e *Expression, text lines) *Expression {
+	if !text.holds(e.Span) || !text.holds(e.Whole()) || e.Span.Length == 0 || !within(e.Span, e.Whole()) {
+		return e
+	}
+	parts := slices.Clone(e.Parts)
+	for _, option := range e.Options {
+		if !text.holds(option.Span) || !within(option.Span, e.Whole()) {
+			return e
+		}
+		parts = append(parts, option.Value)
+	}
+	for _, part := range parts {
+		if at := part.Whole(); at.Line == e.Whole().Line && !strings.Contains(string(text), "\n") && !within(at, e.Whole()) {
+			return part
+		}
+		if found := misplaced(part, text); found != nil {
+			return found
+		}
+	}
+	return nil
+}
+
+// FuzzParse parses any text: it ends without a panic, and the parts and what
+// is wrong stand in the text.
 func FuzzParse(f *testing.F) {
-	for _, text := range []string{"a + b", "f(x, y: [1, 2][m])", "((", "2[", "'", "a ? b : c < d < e", "-é^²", "x.y.z(1)"} {
+	for _, text := range []string{
+		"a + b", "f(x, y: [1, 2][m])", "((", "2[", "'", "a ? b : c < d < e", "-é^²", "x.y.z(1)",
+		"(+a)[m] *\n  (é\n  + [2, Ω] [cm^-1])", "0 < (0 < x < 1 ? 1 : 2) < 3", "f(h: \"text\", k:-true)", "3[flurb] + a.b.c[", "1\u00a0[m]\xff",
+	} {
 		f.Add(text)
 	}
 	f.Fuzz(func(t *testing.T, text string) {
-		if strings.ContainsAny(text, "\n\r") {
-			return
-		}
 		var problems problem.List
-		e := Parse(text, wholeLine{}, &problems)
+		e := Parse(text, lines(text), &problems)
 		if (e == nil) == problems.Empty() {
 			t.Fatalf("%q: %v, problems %v", text, e, problems.Sorted())
 		}
+		if e != nil {
+			if part := misplaced(e, lines(text)); part != nil {
+				t.Fatalf("%q: %s at %v", text, shown(part), part.Span)
+			}
+			if n := visits(e); n > MostParts {
+				t.Fatalf("%q: %d parts", text, n)
+			}
+		}
 		for _, p := range problems.Sorted() {
-			if p.Column < 1 || p.Column > len(text)+1 {
+			if !lines(text).holds(p.Span) {
 				t.Fatalf("%q: %v", text, p)
 			}
 		}
 	})
+}
+
+// BenchmarkParse measures the time for a formula as sheets hold them.
+func BenchmarkParse(b *testing.B) {
+	formulas := []string{
+		"1[atm] * depth / 10[m]",
+		"sea_water_density(salinity, cold, p_sea)",
+		"sea_pressure_at_depth(depth, latitude, height: 2[m])",
+		"rating >= 1.25 * p_sea and 0[m] < depth < 6000[m]",
+		"(a - b)^2 + exp(-nature.h * nature.c * nu / (nature.k_B * T))",
+		"T < 300[K] ? mean([158.3, 227.0, 310.5][cm^-1]) : item(levels.energy, 2)",
+	}
+	const n = 1_000
+	for b.Loop() {
+		for i := range n {
+			var problems problem.List
+			if text := formulas[i%len(formulas)]; Parse(text, lines(text), &problems) == nil {
+				b.Fatal(problems.Sorted())
+			}
+		}
+	}
+	b.ReportMetric(float64(b.Elapsed().Nanoseconds())/float64(b.N)/n, "ns/formula")
 }
