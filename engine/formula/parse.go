@@ -47,6 +47,7 @@ type operand struct {
 	*Expression
 	from, to int
 	signed   bool // a plus sign stands before it
+	told     bool // the dot behind it has been reported
 }
 
 // What binds tighter has the higher number. A choice binds least of all and
@@ -207,7 +208,7 @@ func (p *parser) unary() operand {
 	sign := p.take()
 	of := p.expression(binds)
 	if sign.text == "+" {
-		return operand{of.Expression, sign.from, of.to, true}
+		return operand{Expression: of.Expression, from: sign.from, to: of.to, signed: true}
 	}
 	return p.made(&Expression{Form: Unary, Word: sign.text, Parts: []*Expression{of.Expression}}, sign.from, of.to)
 }
@@ -322,9 +323,12 @@ func (p *parser) field(owner operand) operand {
 	case p.is("("):
 		p.report(at, problem.Construct, "only a law's name is called", "write the law's name alone before its arguments")
 		return p.call(t)
+	case owner.told: // further dots are the same mistake
+		return owner
 	case owner.Form != Name || owner.signed:
 		p.report(at, problem.Construct, "only a table's column and a constant of nature are read with a dot", "")
-		return p.made(&Expression{Form: Name}, owner.from, t.to) // further dots are the same mistake
+		owner.told = true
+		return owner
 	}
 	return p.made(&Expression{Form: Member, Word: owner.Word, Field: t.text}, owner.from, t.to)
 }
@@ -343,8 +347,12 @@ func (p *parser) fail(at problem.Span, code problem.Code, message, suggestion st
 	p.failed = true
 }
 
-// misfit reports that the current token does not fit.
+// misfit reports that the current token does not fit. It is asked again on each
+// way out of a formula that is broken off deep inside.
 func (p *parser) misfit() {
+	if p.failed {
+		return
+	}
 	t := p.now()
 	if t.kind == endToken {
 		advice := "write what is missing behind it"

@@ -103,6 +103,8 @@ func TestMisfits(t *testing.T) {
 		{"a not b", "'not' does not fit here"},
 		{"(a + b).c", "only a table's column and a constant of nature are read with a dot"},
 		{"a.b.c.d", "only a table's column and a constant of nature are read with a dot"},
+		{"a.b.c.d.e.f", "only a table's column and a constant of nature are read with a dot"},
+		{"a?", "the formula ends before it is complete"},
 		{"(+a).b", "only a table's column and a constant of nature are read with a dot"},
 		{"true.b", "only a table's column and a constant of nature are read with a dot"},
 		{"a.b(c)", "only a law's name is called"},
